@@ -1,0 +1,41 @@
+import PgBoss from "pg-boss";
+import { pino } from "pino";
+import { getDb } from "@/db/client";
+import type { QueueName } from "@/db/queues";
+import { env } from "@/lib/env";
+import { sendMail } from "@/lib/jobs/send-mail";
+
+const log = pino({ name: "worker" });
+
+/** What each queue does. A job is a function of its payload that is safe to run twice. */
+const JOBS: Partial<Record<QueueName, (data: unknown) => Promise<void>>> = {
+  "send-mail": sendMail,
+};
+
+async function main(): Promise<void> {
+  // The queue's tables are made by the migration role; this process may only use them.
+  const boss = new PgBoss({ connectionString: env().DATABASE_URL, migrate: false, max: 4 });
+  boss.on("error", (error) => log.error({ err: error }, "queue"));
+  await boss.start();
+  for (const [queue, run] of Object.entries(JOBS)) {
+    await boss.work(queue, { batchSize: 1, pollingIntervalSeconds: 1 }, async ([job]) => {
+      if (!job) return;
+      log.info({ queue, job: job.id }, "begins");
+      await run(job.data);
+      log.info({ queue, job: job.id }, "done");
+    });
+  }
+  log.info("ready");
+  const stop = async () => {
+    await boss.stop({ graceful: true, timeout: 10_000 });
+    await getDb().destroy();
+    process.exit(0);
+  };
+  process.once("SIGTERM", stop);
+  process.once("SIGINT", stop);
+}
+
+main().catch((error: unknown) => {
+  log.fatal({ err: error }, "the worker could not start");
+  process.exit(1);
+});

@@ -1,0 +1,4 @@
+import type { DoorSpec } from "@/lib/schemas/contract/door-spec";
+
+/** Doors of observations. */
+export const observationsDoors = {} as const satisfies Record<string, DoorSpec>;

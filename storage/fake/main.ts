@@ -1,0 +1,34 @@
+import { startFakeStore } from "@/storage/fake/server";
+
+// The store as a process of its own. It reads the environment itself, so that it can run without the application's settings.
+function need(name: string): string {
+  const value = process.env[name];
+  if (value) return value;
+  console.error(`The store needs ${name}.`);
+  process.exit(2);
+}
+
+const port = Number(process.env.FAKE_STORE_PORT || "0");
+if (!Number.isInteger(port) || port < 0 || port > 65_535) {
+  console.error("FAKE_STORE_PORT must be a port number from 0 to 65535.");
+  process.exit(2);
+}
+
+try {
+  const store = await startFakeStore({
+    directory: need("FAKE_STORE_DIR"),
+    port,
+    host: process.env.FAKE_STORE_HOST || "127.0.0.1",
+    accessKeyId: need("S3_ACCESS_KEY_ID"),
+    secretAccessKey: need("S3_SECRET_ACCESS_KEY"),
+    corsOrigins: (process.env.FAKE_STORE_ORIGINS ?? "").split(",").map((origin) => origin.trim()).filter(Boolean),
+  });
+  console.log(`The store is at ${store.url}`);
+  const stop = () => void store.close().then(() => process.exit(0));
+  process.once("SIGTERM", stop);
+  process.once("SIGINT", stop);
+} catch (error) {
+  const { code, message } = error as NodeJS.ErrnoException;
+  console.error(code === "EADDRINUSE" ? `Port ${port} is taken by another program.` : `The store can't start: ${message}`);
+  process.exit(1);
+}

@@ -3,18 +3,13 @@ import { startFakeStore } from "@/storage/fake/server";
 // The store as a process of its own. It reads the environment itself, so that it can run without the application's settings.
 function need(name: string): string {
   const value = process.env[name];
-  if (value) return value;
-  console.error(`The store needs ${name}.`);
-  process.exit(2);
+  if (!value) throw new Error(`${name} is not set.`);
+  return value;
 }
 
-const port = Number(process.env.FAKE_STORE_PORT || "0");
-if (!Number.isInteger(port) || port < 0 || port > 65_535) {
-  console.error("FAKE_STORE_PORT must be a port number from 0 to 65535.");
-  process.exit(2);
-}
-
-try {
+async function main(): Promise<void> {
+  const port = Number(process.env.FAKE_STORE_PORT || "0");
+  if (!Number.isInteger(port) || port < 0 || port > 65_535) throw new Error("FAKE_STORE_PORT must be a port number from 0 to 65535.");
   const store = await startFakeStore({
     directory: need("FAKE_STORE_DIR"),
     port,
@@ -27,8 +22,9 @@ try {
   const stop = () => void store.close().then(() => process.exit(0));
   process.once("SIGTERM", stop);
   process.once("SIGINT", stop);
-} catch (error) {
-  const { code, message } = error as NodeJS.ErrnoException;
-  console.error(code === "EADDRINUSE" ? `Port ${port} is taken by another program.` : `The store can't start: ${message}`);
-  process.exit(1);
 }
+
+main().catch((error: NodeJS.ErrnoException) => {
+  console.error(error.code === "EADDRINUSE" ? "The store can't start: its port is taken by another program." : `The store can't start: ${error.message}`);
+  process.exit(1);
+});

@@ -8,9 +8,9 @@ pg.types.setTypeParser(pg.types.builtins.NUMERIC, Number);
 // A date is a day of the calendar, not a moment: keep it as yyyy-mm-dd, out of reach of time zones.
 pg.types.setTypeParser(pg.types.builtins.DATE, (text) => text);
 
-/** A connection pool to `url`. The caller ends it with `destroy()`. */
+/** A connection pool to `url`, with days counted in UTC as the server's clock does. The caller ends it with `destroy()`. */
 export function connect(url: string, poolSize = 10): Knex {
-  return knex({ client: "pg", connection: { connectionString: url }, pool: { min: 0, max: poolSize } });
+  return knex({ client: "pg", connection: { connectionString: url, options: "-c TimeZone=UTC" }, pool: { min: 0, max: poolSize } });
 }
 
 // The development server loads modules anew on every change; one pool must outlive that.

@@ -52,7 +52,7 @@ function checksumToCheck(request: StoreRequest, agreed: ChecksumAlgorithm | unde
 /**
  * Opens the body of a PUT or POST, and lets a client that waits for "100 Continue" go on.
  * @param agreed an algorithm to work out even if the client sends no value of it.
- * @throws Refusal MissingContentLength, EntityTooLarge, InvalidDigest; while reading: BadDigest, IncompleteBody,
+ * @throws Refusal MissingContentLength, EntityTooLarge, InvalidDigest; while reading: BadDigest, IncompleteBody, MalformedTrailerError,
  *   XAmzContentSHA256Mismatch, SignatureDoesNotMatch
  */
 export function receiveBody(request: StoreRequest, auth: Authorised, agreed?: ChecksumAlgorithm): ReceivedBody {
@@ -97,6 +97,9 @@ export function receiveBody(request: StoreRequest, auth: Authorised, agreed?: Ch
     if (!wanted || !running) return;
     const value = running.digest().toString("base64");
     const expected = wanted.expected ?? trailers[checksumHeaderName(wanted.algorithm)];
+    if (expected === undefined && request.headers["x-amz-trailer"] !== undefined) {
+      throw new Refusal("MalformedTrailerError", "The request announced a trailing checksum and did not send it.");
+    }
     if (expected !== undefined && expected !== value) {
       throw new Refusal("BadDigest", `The ${wanted.algorithm} you specified did not match the calculated checksum.`);
     }

@@ -21,6 +21,7 @@ const STATUS = {
   InvalidRequest: 400,
   InvalidURI: 400,
   KeyTooLongError: 400,
+  MalformedTrailerError: 400,
   MalformedXML: 400,
   MethodNotAllowed: 405,
   MissingContentLength: 411,

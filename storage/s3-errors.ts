@@ -28,7 +28,9 @@ export async function callStore<T>(call: () => Promise<T>): Promise<T> {
   } catch (error) {
     const status = httpStatus(error);
     if (NETWORK.test(errorCode(error)) || (status !== undefined && status >= 500)) {
-      throw new AppError("unavailable", "The file store can't be reached at the moment. Please try again in a minute.");
+      const unavailable = new AppError("unavailable", "The file store can't be reached at the moment. Please try again in a minute.");
+      unavailable.cause = error; // For the log; the sentence is for people.
+      throw unavailable;
     }
     throw error;
   }

@@ -123,8 +123,14 @@ export function createObjectStore(options: ObjectStoreOptions): ObjectStore {
     },
 
     async putObject(key, body, { contentType, ifAbsent }) {
-      const IfNoneMatch = ifAbsent ? "*" : undefined;
-      const command = new PutObjectCommand({ Bucket: bucket, Key: key, Body: body, ContentType: contentType, IfNoneMatch });
+      const command = new PutObjectCommand({
+        Bucket: bucket,
+        Key: key,
+        Body: body,
+        ContentLength: Buffer.byteLength(body),
+        ContentType: contentType,
+        IfNoneMatch: ifAbsent ? "*" : undefined,
+      });
       const { ETag } = await callStore(() => client.send(command)).catch((error: unknown) => {
         if (errorCode(error) === "PreconditionFailed") throw new AppError("conflict", "That file is in the store already.");
         throw error;

@@ -100,7 +100,7 @@ function chooseParts(upload: OpenUpload, text: string): PartRecord[] {
     throw new Refusal("MalformedXML", "The XML must name at least one part.");
   }
   let before = 0;
-  return named.map((element, index) => {
+  const parts = named.map((element) => {
     const number = Number(childText(element, "PartNumber"));
     const etag = childText(element, "ETag")?.trim().replace(/^"|"$/g, "");
     const part = upload.parts.get(number);
@@ -112,13 +112,15 @@ function chooseParts(upload: OpenUpload, text: string): PartRecord[] {
     }
     if (number <= before) throw new Refusal("InvalidPartOrder", "The list of parts was not in ascending order.");
     before = number;
-    if (index < named.length - 1 && part.piece.sizeBytes < MIN_PART_BYTES) {
-      throw new Refusal("EntityTooSmall", "Your proposed upload is smaller than the minimum allowed size", {
-        details: { PartNumber: String(number), ProposedSize: String(part.piece.sizeBytes), MinSizeAllowed: String(MIN_PART_BYTES) },
-      });
-    }
     return part;
   });
+  const small = parts.slice(0, -1).find((part) => part.piece.sizeBytes < MIN_PART_BYTES);
+  if (small) {
+    throw new Refusal("EntityTooSmall", "Your proposed upload is smaller than the minimum allowed size", {
+      details: { PartNumber: String(small.number), ProposedSize: String(small.piece.sizeBytes), MinSizeAllowed: String(MIN_PART_BYTES) },
+    });
+  }
+  return parts;
 }
 
 /** Makes the object out of the parts where they lie: nothing is copied, so it takes as long for gigabytes as for bytes. */

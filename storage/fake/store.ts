@@ -18,8 +18,9 @@ export class Store {
   static async open(directory: string): Promise<Store> {
     const store = new Store(directory);
     await mkdir(directory, { recursive: true });
-    for (const name of await readdir(directory)) {
-      if (NAME.test(name)) store.#buckets.set(name, await Bucket.open(join(directory, name)));
+    for (const entry of await readdir(directory, { withFileTypes: true })) {
+      const { name } = entry;
+      if (entry.isDirectory() && NAME.test(name)) store.#buckets.set(name, await Bucket.open(join(directory, name)));
     }
     return store;
   }

@@ -18,10 +18,11 @@ async function main(): Promise<void> {
     secretAccessKey: need("S3_SECRET_ACCESS_KEY"),
     corsOrigins: (process.env.FAKE_STORE_ORIGINS ?? "").split(",").map((origin) => origin.trim()).filter(Boolean),
   });
-  console.log(`The store is at ${store.url}`);
   const stop = () => void store.close().then(() => process.exit(0));
   process.once("SIGTERM", stop);
   process.once("SIGINT", stop);
+  // Last, since whoever waits for this line may end the process at once.
+  console.log(`The store is at ${store.url}`);
 }
 
 main().catch((error: NodeJS.ErrnoException) => {

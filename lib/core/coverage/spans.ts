@@ -1,0 +1,60 @@
+/** A played stretch [startMs, endMs) in whole ms on the recording's axis. */
+export type Span = readonly [startMs: number, endMs: number];
+
+/** The same ground without overlaps, in order; empty and backward spans are dropped, touching ones joined. */
+export function unionSpans(spans: readonly Span[]): Span[] {
+  const united: [number, number][] = [];
+  for (const [start, end] of spans.filter(([start, end]) => end > start).toSorted((a, b) => a[0] - b[0])) {
+    const last = united.at(-1);
+    if (last && start <= last[1]) last[1] = Math.max(last[1], end);
+    else united.push([start, end]);
+  }
+  return united;
+}
+
+/** Length of the united spans inside [startMs, endMs). */
+export function coveredMs(spans: readonly Span[], startMs: number, endMs: number): number {
+  return unionSpans(spans).reduce((sum, [from, to]) => sum + Math.max(0, Math.min(to, endMs) - Math.max(from, startMs)), 0);
+}
+
+/** Share of a step that was played, 0–1. */
+export function seenShare(spans: readonly Span[], step: { startMs: number; endMs: number }): number {
+  return coveredMs(spans, step.startMs, step.endMs) / (step.endMs - step.startMs);
+}
+
+/** A little more than the clock says: reports travel, and a player's clock and ours never quite agree. */
+export const ALLOWANCE_MS = 3000;
+/** The fastest rate that the player offers. */
+export const MAX_RATE = 2;
+
+/**
+ * What the server accepts of a report: never more than could have been played since the last one. Spans are united and clipped to the
+ * recording, then taken in the order given until the time is used up; the one that goes over is cut.
+ * @param of.elapsedMs  wall time since the person's last report from any tab or device
+ * @param of.rate       claimed rate of play; held to 0.25–MAX_RATE
+ */
+export function acceptSpans(of: { reported: readonly Span[]; durationMs: number; elapsedMs: number; rate: number }): Span[] {
+  const rate = Math.min(MAX_RATE, Math.max(0.25, of.rate));
+  let left = Math.floor(Math.max(0, of.elapsedMs) * rate) + ALLOWANCE_MS;
+  const accepted: Span[] = [];
+  const clipped = of.reported.map(([start, end]): Span => [Math.max(0, Math.floor(start)), Math.min(of.durationMs, Math.floor(end))]);
+  for (const [start, end] of unionSpans(clipped)) {
+    const taken = Math.min(end - start, left);
+    if (taken <= 0) break;
+    accepted.push([start, start + taken]);
+    left -= taken;
+  }
+  return accepted;
+}
+
+/**
+ * How far a learner may go in a recording: to the end of what was played without a gap from `fromMs`, and a moment more. Going back is free.
+ */
+export function furthestAllowed(played: readonly Span[], fromMs: number, slackMs = 1500): number {
+  let reach = fromMs;
+  for (const [start, end] of unionSpans(played)) {
+    if (start > reach + slackMs) break;
+    reach = Math.max(reach, end);
+  }
+  return reach + slackMs;
+}

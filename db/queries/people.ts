@@ -1,3 +1,4 @@
+import type { Knex } from "knex";
 import type { Db } from "@/db/client";
 import type { Actor, OrganisationKind, Role, SignedIn } from "@/lib/core/roles";
 
@@ -55,4 +56,27 @@ export async function findActorRow(db: Db, personId: string, slug: string): Prom
 /** Every organisation that the person belongs to now, by name. */
 export async function listActorRows(db: Db, personId: string): Promise<ActorRow[]> {
   return (await membershipsOf(db, personId).orderBy("o.name")).map(toActorRow);
+}
+
+/** Makes a person; undefined where the address has one already. */
+export async function insertPerson(
+  trx: Knex.Transaction,
+  of: { name: string; email: string; passwordHash: string; dateOfBirth: string | null },
+): Promise<string | undefined> {
+  const [row] = await trx("people")
+    .insert({ name: of.name, email: of.email, password_hash: of.passwordHash, date_of_birth: of.dateOfBirth })
+    .onConflict("email")
+    .ignore()
+    .returning<{ id: string }[]>("id");
+  return row?.id;
+}
+
+export async function setPasswordHash(trx: Knex.Transaction, personId: string, passwordHash: string): Promise<void> {
+  await trx("people").where({ id: personId }).update({ password_hash: passwordHash });
+}
+
+/** Suspends a person from the whole installation, or lets them back in. Returns whether there is such a person. */
+export async function setSuspended(db: Db, email: string, suspended: boolean): Promise<boolean> {
+  const changed = await db("people").where({ email }).update({ suspended_at: suspended ? db.fn.now() : null });
+  return changed > 0;
 }

@@ -29,3 +29,18 @@ export async function listOpenSessions(db: Db, personId: string): Promise<OpenSe
     .orderBy("last_seen_at", "desc");
   return rows.map((row) => ({ id: row.id, device: row.device, createdAt: row.created_at, lastSeenAt: row.last_seen_at }));
 }
+
+/** Ends one of the person's own sessions. Returns whether it was theirs and open. */
+export async function endSessionOf(db: Db, personId: string, sessionId: string): Promise<boolean> {
+  const ended = await db("sessions").where({ id: sessionId, person_id: personId }).whereNull("ended_at").update({ ended_at: db.fn.now() });
+  return ended > 0;
+}
+
+/** Signs the person out on every device but the one in hand. */
+export async function endOtherSessionsOf(db: Db, personId: string, keepSessionId: string): Promise<number> {
+  return db("sessions")
+    .where({ person_id: personId })
+    .whereNot({ id: keepSessionId })
+    .whereNull("ended_at")
+    .update({ ended_at: db.fn.now() });
+}

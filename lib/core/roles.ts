@@ -19,6 +19,11 @@ export const ROLE_LABEL: Record<Role, string> = {
   verifier: "verifier",
 };
 
+/** What a role is called at a kind of organisation: a college has a manager too. */
+export function roleLabel(role: Role, kind: OrganisationKind): string {
+  return role === "manager" ? `${kind} manager` : ROLE_LABEL[role];
+}
+
 /** A signed-in person, not yet at an organisation. */
 export type SignedIn = { personId: string; name: string; email: string; sessionId: string };
 

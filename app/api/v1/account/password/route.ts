@@ -1,0 +1,4 @@
+import { door } from "@/lib/http/door";
+import { changePassword } from "@/lib/services/accounts/change-password";
+
+export const PUT = door("PUT /account/password", ({ actor, body }) => changePassword(actor, body));

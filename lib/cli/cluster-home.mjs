@@ -4,35 +4,30 @@ import { findProgram, run } from "./programs.mjs";
 import { Told } from "./told.mjs";
 
 /**
- * Where a cluster lives and who runs it. PostgreSQL refuses root, and a clone under root's home can't be entered by anybody else: as
- * root the server runs as `postgres`, in a folder that this account can reach, named after the data folder it belongs to.
- * @typedef {{ folder: string, asServer: (program: string, args: string[]) => [string, string[]], account?: { uid: number, gid: number } }} ClusterHome
+ * The folder of a data folder's cluster. PostgreSQL refuses root, and a clone under root's home can't be entered by anybody else: as
+ * root the cluster lies outside the clone, under a name that follows from the data folder's.
+ * @param {string} dataFolder
  */
+export function clusterFolder(dataFolder, isRoot = process.getuid?.() === 0) {
+  if (!isRoot) return resolve(dataFolder, "postgres");
+  return `/var/lib/witnessline/${createHash("sha256").update(resolve(dataFolder)).digest("hex").slice(0, 12)}`;
+}
 
 /**
- * @param {string} dataFolder
- * @returns {Promise<ClusterHome>}
+ * Who runs the server: ourselves, or as root the account `postgres`.
+ * @typedef {{ uid?: number, gid?: number, command: (program: string, args: string[]) => [string, string[]] }} ServerAccount
+ * @returns {Promise<ServerAccount>}
  */
-export async function findClusterHome(dataFolder) {
-  if (process.getuid?.() !== 0) {
-    return { folder: resolve(dataFolder, "postgres"), asServer: (program, args) => [program, args] };
+export async function findServerAccount() {
+  if (process.getuid?.() !== 0) return { command: (program, args) => [program, args] };
+  const { code, output } = await run("getent", ["passwd", "postgres"]);
+  const [, , uid, gid] = output.split(":").map(Number);
+  if (code !== 0 || !uid || !gid) {
+    throw new Told("PostgreSQL refuses to run as root, and this machine has no account `postgres`. Start as another person, or install Debian's package postgresql.");
   }
-  const account = await findAccount("postgres");
-  if (!account) throw new Told("PostgreSQL refuses to run as root, and this machine has no account `postgres`. Start as another person, or install the Debian package postgresql.");
-  const name = createHash("sha256").update(resolve(dataFolder)).digest("hex").slice(0, 12);
-  return { folder: `/var/lib/witnessline/${name}`, asServer: asPostgres(), account };
-}
-
-function asPostgres() {
-  if (findProgram("runuser")) return (program, args) => ["runuser", ["-u", "postgres", "--", program, ...args]];
+  if (findProgram("runuser")) return { uid, gid, command: (program, args) => ["runuser", ["-u", "postgres", "--", program, ...args]] };
   if (findProgram("setpriv")) {
-    return (program, args) => ["setpriv", ["--reuid=postgres", "--regid=postgres", "--init-groups", program, ...args]];
+    return { uid, gid, command: (program, args) => ["setpriv", ["--reuid=postgres", "--regid=postgres", "--init-groups", program, ...args]] };
   }
   throw new Told("PostgreSQL refuses to run as root, and neither runuser nor setpriv is here to change the account. Start as another person.");
-}
-
-async function findAccount(name) {
-  const { code, output } = await run("getent", ["passwd", name]);
-  const [, , uid, gid] = output.split(":");
-  return code === 0 && uid && gid ? { uid: Number(uid), gid: Number(gid) } : undefined;
 }

@@ -37,6 +37,15 @@ export function findPostgres(base = "/usr/lib/postgresql") {
   return folders.find((folder) => ["initdb", "pg_ctl", "psql"].every((program) => findProgram(program, [folder])));
 }
 
+const running = new Set();
+
+/** Ends every program that `run` still waits for. */
+export async function stopPrograms() {
+  const ends = [...running].map((child) => new Promise((resolve) => child.once("close", resolve)));
+  for (const child of running) child.kill("SIGTERM");
+  await Promise.race([Promise.all(ends), new Promise((resolve) => setTimeout(resolve, 5000).unref())]);
+}
+
 /**
  * Runs a program to its end.
  * @param {string} program
@@ -52,8 +61,10 @@ export function run(program, args, { input, env, cwd, log, discard } = {}) {
     let output = "";
     child.stdout?.on("data", (chunk) => (output += chunk));
     child.stderr?.on("data", (chunk) => (output += chunk));
-    child.on("error", (error) => resolve({ code: 127, output: String(error) }));
-    child.on("close", (code, signal) => resolve({ code: code ?? (signal ? 128 : 1), output }));
+    running.add(child);
+    const end = (result) => (running.delete(child), resolve(result));
+    child.on("error", (error) => end({ code: 127, output: String(error) }));
+    child.on("close", (code) => end({ code: code ?? 128, output }));
     child.stdin?.on("error", () => {}); // A program that ends early closes its input; its exit code says so.
     if (input !== undefined) child.stdin?.end(input);
   });

@@ -6,10 +6,11 @@ export class Told extends Error {}
  * @param {() => Promise<number | void>} main  gives the exit code; nothing means 0.
  */
 export async function runCommand(main) {
+  let code = 1;
   try {
-    process.exitCode = (await main()) ?? 0;
+    code = (await main()) ?? 0;
   } catch (error) {
     console.error(error instanceof Told ? `\n${error.message}` : error);
-    process.exitCode = 1;
   }
+  process.exit(code); // work that was given up may still be waiting for something
 }

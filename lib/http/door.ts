@@ -38,7 +38,8 @@ export function door<K extends DoorKey>(key: K, run: (call: DoorCall<K>) => Prom
   return async (request, context) => {
     try {
       assertSameOrigin(request, env().APP_URL);
-      const raw = await context.params;
+      // A route without a name in its address gets no parameters at all.
+      const raw = (await context.params) ?? {};
       const actor = await callerOf(spec, raw.org);
       const params = spec.params ? parseAddress(spec.params, raw) : undefined;
       const query = spec.query?.parse(Object.fromEntries(new URL(request.url).searchParams));

@@ -1,0 +1,3 @@
+declare module "video.js/core" {
+  export { default } from "video.js";
+}

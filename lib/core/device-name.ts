@@ -3,7 +3,7 @@ const BROWSERS: [RegExp, string][] = [
   [/\bEdgA?\//, "Edge"],
   [/\bOPR\//, "Opera"],
   [/\bFirefox\/|\bFxiOS\//, "Firefox"],
-  [/\bChrom(e|ium)\/|\bCriOS\//, "Chrome"],
+  [/Chrom(e|ium)\/|\bCriOS\//, "Chrome"],
   [/\bSafari\//, "Safari"],
 ];
 const SYSTEMS: [RegExp, string][] = [

@@ -19,7 +19,7 @@ export function FrontPage({ demo }: { demo: boolean }) {
       <main id="main" tabIndex={-1} className="mx-auto w-full max-w-5xl px-4 py-8 outline-none sm:px-6 sm:py-16">
         <div className="grid items-center gap-8 sm:grid-cols-[1fr_auto]">
           <div>
-            <h1 className="max-w-[18ch] text-[2.6rem] leading-[1.02] sm:text-[3.6rem]">A line across the bolt, for work that people do</h1>
+            <h1 className="max-w-[20ch] text-balance text-[2.6rem] leading-[1.02] sm:text-[3.6rem]">A line across the bolt, for work that people do</h1>
             <p className="mt-5 max-w-[60ch] text-[1.15rem]">
               When a safety-critical fastener has been tightened, a line of paint is drawn across its head and the part. Anyone can see later
               that it was done, and whether it has moved. Witnessline does that for a trade: recordings of real repair jobs become training,

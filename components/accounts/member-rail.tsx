@@ -24,7 +24,15 @@ export function MemberRail({ frame }: { frame: FrameView }) {
     <Rail
       home={`${base}/today`}
       places={places.map((place) => ({ ...place, href: `${base}${place.href}` }))}
-      who={<WhoMenu name={frame.name} roleLabel={roleLabel} organisation={frame.organisation.name} posts={frame.posts} />}
+      who={
+        <WhoMenu
+          name={frame.name}
+          roleLabel={roleLabel}
+          organisation={frame.organisation.name}
+          current={`${frame.organisation.slug} ${role}`}
+          posts={frame.posts}
+        />
+      }
     />
   );
 }

@@ -1,3 +1,4 @@
+import { leaveFor } from "@/components/accounts/leave-for";
 import { ApiProblem } from "@/components/api/client";
 
 /**
@@ -34,5 +35,5 @@ export async function signIn(email: string, password: string): Promise<void> {
 /** Ends this session on the server, then leaves to the front page with nothing of it kept in the window. */
 export async function signOut(): Promise<void> {
   await postAuth("signout", {});
-  window.location.assign("/sign-in");
+  leaveFor("/sign-in");
 }

@@ -3,6 +3,7 @@
 import Link from "next/link";
 import { useRef } from "react";
 import { DemoSignIns } from "@/components/accounts/demo-sign-ins";
+import { leaveFor } from "@/components/accounts/leave-for";
 import { PasswordField } from "@/components/accounts/password-field";
 import { textOf } from "@/components/accounts/refusal";
 import { signIn } from "@/components/accounts/session-calls";
@@ -19,7 +20,7 @@ export function SignInForm({ next, email = "", demo, mailSinkUrl }: SignInFormPr
   const ref = useRef<HTMLFormElement>(null);
   const { busy, refusal, formProps } = useForm(async (form) => {
     await signIn(textOf(form, "email"), textOf(form, "password"));
-    window.location.assign(next);
+    leaveFor(next);
   });
   function fillIn(chosen: DemoSignIn) {
     for (const name of ["email", "password"] as const) {

@@ -21,9 +21,8 @@ export function ThemeChoice() {
     document.cookie = `theme=${next}; path=/; max-age=${next === "system" ? 0 : 365 * 24 * 3600}; samesite=lax`;
   }
   return (
-    <div ref={(element) => void (element && theme === null && setTheme(themeOfPage()))} className="px-3">
-      <p className="pb-1 font-plate text-[1.05rem] font-semibold text-ink2">Colours</p>
-      <Segmented legend="Colours" name="theme" value={theme} choices={THEMES} onChange={choose} height={44} />
+    <div ref={(element) => void (element && theme === null && setTheme(themeOfPage()))}>
+      <Segmented legend="Colours of this device" name="theme" value={theme} choices={THEMES} onChange={choose} height={44} />
     </div>
   );
 }

@@ -8,6 +8,8 @@ type WhoMenuProps = {
   name: string;
   roleLabel: string;
   organisation: string;
+  /** Key of the post whose rail is shown. */
+  current: string;
   /** Everything that the person is, everywhere; the switch is shown where there is more than one. */
   posts: readonly { key: string; roleLabel: string; organisation: string; href: string }[];
 };
@@ -15,7 +17,7 @@ type WhoMenuProps = {
 const ITEM = "flex min-h-11 w-full items-center rounded px-3 text-left hover:bg-tint";
 
 /** Who is signed in, as what, where; and the way to their account, their other roles, the colours and out. A popover of the browser's own. */
-export function WhoMenu({ name, roleLabel, organisation, posts }: WhoMenuProps) {
+export function WhoMenu({ name, roleLabel, organisation, current, posts }: WhoMenuProps) {
   return (
     <>
       <button
@@ -52,7 +54,12 @@ export function WhoMenu({ name, roleLabel, organisation, posts }: WhoMenuProps) 
             <ul>
               {posts.map((post) => (
                 <li key={post.key}>
-                  <Link href={post.href} className={ITEM} onClick={closeMenu}>
+                  <Link
+                    href={post.href}
+                    className={`${ITEM} ${post.key === current ? "border-l-4 border-l-strong bg-tint" : ""}`}
+                    onClick={closeMenu}
+                    {...(post.key === current ? { "aria-current": "true" as const } : {})}
+                  >
                     <span>
                       <span className="block font-semibold leading-tight">{post.roleLabel}</span>
                       <span className="block text-sm text-ink2">{post.organisation}</span>
@@ -63,7 +70,8 @@ export function WhoMenu({ name, roleLabel, organisation, posts }: WhoMenuProps) 
             </ul>
           </nav>
         )}
-        <div className="border-t border-rule py-2">
+        <div className="border-t border-rule px-3 pb-3 pt-2">
+          <p className="pb-1 font-plate text-[1.05rem] font-semibold text-ink2">Colours</p>
           <ThemeChoice />
         </div>
         <div className="border-t border-rule pt-2">

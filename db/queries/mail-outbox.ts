@@ -26,8 +26,16 @@ export async function lockUnsentLetter(trx: Knex.Transaction, id: string): Promi
   return row && { id: row.id, to: row.to_address, subject: row.subject, body: row.body };
 }
 
+/** Notes that it left, and forgets the token of a single-use link: from then on only its hash is kept anywhere. */
 export async function markLetterSent(trx: Knex.Transaction, id: string): Promise<void> {
-  await trx("mail_outbox").where({ id }).update({ sent_at: trx.fn.now(), attempts: trx.raw("attempts + 1"), last_failure: null });
+  await trx("mail_outbox")
+    .where({ id })
+    .update({
+      sent_at: trx.fn.now(),
+      attempts: trx.raw("attempts + 1"),
+      last_failure: null,
+      body: trx.raw(`regexp_replace(body, ?, '#…', 'g')`, ["#[A-Za-z0-9_-]{43}(?![A-Za-z0-9_-])"]),
+    });
 }
 
 /** Notes why it did not leave; the queue tries again later. */

@@ -28,7 +28,8 @@ declare module "next-auth/jwt" {
 /** Sign-in by address and password. The token in the cookie carries a session's id and nothing that decides anything. */
 export const authOptions: NextAuthOptions = {
   session: { strategy: "jwt", maxAge: SESSION_DAYS * 24 * 3600 },
-  pages: { signIn: "/sign-in", error: "/sign-in" },
+  // Every page is ours: the library's own bring styles that the content policy refuses.
+  pages: { signIn: "/sign-in", error: "/sign-in", signOut: "/account", verifyRequest: "/sign-in" },
   providers: [
     Credentials({
       name: "password",

@@ -31,7 +31,7 @@ export default async function AccountPage() {
                 <ul>
                   {account.posts.map((post) => (
                     <li key={post.key}>
-                      <Link href={post.href} className="flex min-h-12 flex-wrap items-center justify-between gap-x-4 rounded hover:bg-tint">
+                      <Link href={post.href} className="flex min-h-14 flex-col justify-center rounded sm:flex-row sm:items-center sm:justify-between hover:bg-tint">
                         <span className="font-semibold">{post.organisation}</span>
                         <span className="font-plate text-[1.15rem] font-semibold text-strong">{post.roleLabel}</span>
                       </Link>

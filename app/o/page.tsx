@@ -26,7 +26,7 @@ export default async function OrganisationsPage() {
             <ul>
               {posts.map((post) => (
                 <li key={post.key} className="border-b border-rule last:border-b-0">
-                  <Link href={post.href} className="flex min-h-16 flex-wrap items-center justify-between gap-x-4 px-5 py-3 hover:bg-tint">
+                  <Link href={post.href} className="flex min-h-16 flex-col justify-center px-5 py-3 sm:flex-row sm:items-center sm:justify-between hover:bg-tint">
                     <span className="text-[1.1rem] font-semibold">{post.organisation}</span>
                     <span className="font-plate text-[1.2rem] font-semibold text-strong">{post.roleLabel}</span>
                   </Link>

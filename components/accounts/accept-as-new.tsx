@@ -3,12 +3,12 @@
 import { leaveFor } from "@/components/accounts/leave-for";
 import { PasswordField } from "@/components/accounts/password-field";
 import { textOf } from "@/components/accounts/refusal";
+import { Refused } from "@/components/accounts/refused";
 import { signIn } from "@/components/accounts/session-calls";
 import { useForm } from "@/components/accounts/use-form";
 import { api } from "@/components/api/client";
 import { Button } from "@/components/ui/button";
 import { TextField } from "@/components/ui/field";
-import { Notice } from "@/components/ui/notice";
 import type { InvitationView } from "@/lib/schemas/accounts";
 
 /** Name and password of somebody who is new here; an apprentice may also give their date of birth, since some work has an age. */
@@ -22,7 +22,7 @@ export function AcceptAsNew({ token, invitation }: { token: string; invitation: 
   });
   return (
     <form {...formProps} className="grid gap-4">
-      {refusal && <Notice kind="error" title={refusal.sentence} />}
+      <Refused refusal={refusal} />
       <input type="hidden" name="email" autoComplete="username" value={invitation.email} readOnly />
       <TextField name="name" label="Your name" autoComplete="name" defaultValue={invitation.name} error={refusal?.fields.name} required />
       <PasswordField

@@ -1,10 +1,10 @@
 "use client";
 
 import { leaveFor } from "@/components/accounts/leave-for";
+import { Refused } from "@/components/accounts/refused";
 import { useForm } from "@/components/accounts/use-form";
 import { api } from "@/components/api/client";
 import { Button } from "@/components/ui/button";
-import { Notice } from "@/components/ui/notice";
 
 /** One press by somebody who is signed in with the invited address. */
 export function AcceptSignedIn({ token }: { token: string }) {
@@ -14,7 +14,7 @@ export function AcceptSignedIn({ token }: { token: string }) {
   });
   return (
     <form {...formProps} className="grid gap-4">
-      {refusal && <Notice kind="error" title={refusal.sentence} />}
+      <Refused refusal={refusal} />
       <Button type="submit" kind="main" disabled={busy} className="justify-self-start">
         {busy ? "Joining" : "Accept and join"}
       </Button>

@@ -4,6 +4,7 @@ import { useRouter } from "next/navigation";
 import { useRef, useState } from "react";
 import { PasswordField } from "@/components/accounts/password-field";
 import { textOf } from "@/components/accounts/refusal";
+import { Refused } from "@/components/accounts/refused";
 import { useForm } from "@/components/accounts/use-form";
 import { api } from "@/components/api/client";
 import { Button } from "@/components/ui/button";
@@ -30,7 +31,7 @@ export function ChangePasswordForm({ email }: { email: string }) {
           {ended === 0 ? "You were signed in nowhere else." : `Signed out on ${ended === 1 ? "one other device" : `${ended} other devices`}.`}
         </Notice>
       )}
-      {refusal && <Notice kind="error" title={refusal.sentence} />}
+      <Refused refusal={refusal} />
       <input type="hidden" name="email" autoComplete="username" value={email} readOnly />
       <PasswordField name="current" label="Old password" kind="old" error={refusal?.fields.current} />
       <PasswordField name="next" label="New password" kind="new" hint="At least 15 characters." error={refusal?.fields.next} />

@@ -4,9 +4,9 @@ import { useRouter } from "next/navigation";
 import { useState } from "react";
 import { leaveFor } from "@/components/accounts/leave-for";
 import { refusalOf, type Refusal } from "@/components/accounts/refusal";
+import { Refused } from "@/components/accounts/refused";
 import { api } from "@/components/api/client";
 import { Button } from "@/components/ui/button";
-import { Notice } from "@/components/ui/notice";
 import { Tag } from "@/components/ui/tag";
 import { formatDay } from "@/lib/core/dates";
 
@@ -32,7 +32,7 @@ export function Devices({ devices }: { devices: readonly Device[] }) {
 
   return (
     <div className="grid gap-3">
-      {refusal && <Notice kind="error" title={refusal.sentence} />}
+      <Refused refusal={refusal} />
       <ul>
         {devices.map((device) => (
           <li key={device.id} className="flex min-h-14 items-center justify-between gap-x-4 border-b border-rule py-1.5">

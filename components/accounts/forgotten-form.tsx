@@ -2,6 +2,7 @@
 
 import { useState } from "react";
 import { textOf } from "@/components/accounts/refusal";
+import { Refused } from "@/components/accounts/refused";
 import { useForm } from "@/components/accounts/use-form";
 import { api } from "@/components/api/client";
 import { Button, LinkButton } from "@/components/ui/button";
@@ -31,7 +32,7 @@ export function ForgottenForm() {
   }
   return (
     <form {...formProps} className="grid gap-4">
-      {refusal && <Notice kind="error" title={refusal.sentence} />}
+      <Refused refusal={refusal} />
       <TextField name="email" label="E-mail address" type="email" autoComplete="username" error={refusal?.fields.email} required />
       <Button type="submit" kind="main" disabled={busy} className="justify-self-start">
         {busy ? "Asking" : "Send me the link"}

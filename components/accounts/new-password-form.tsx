@@ -4,6 +4,7 @@ import { useState } from "react";
 import { useLinkToken } from "@/components/accounts/link-token";
 import { PasswordField } from "@/components/accounts/password-field";
 import { textOf } from "@/components/accounts/refusal";
+import { Refused } from "@/components/accounts/refused";
 import { useForm } from "@/components/accounts/use-form";
 import { api } from "@/components/api/client";
 import { Button, LinkButton } from "@/components/ui/button";
@@ -46,7 +47,7 @@ export function NewPasswordForm() {
   }
   return (
     <form {...formProps} className="grid gap-4">
-      {refusal && <Notice kind="error" title={refusal.sentence} />}
+      <Refused refusal={refusal} />
       <PasswordField
         name="password"
         label="New password"

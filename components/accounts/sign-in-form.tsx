@@ -6,11 +6,11 @@ import { DemoSignIns } from "@/components/accounts/demo-sign-ins";
 import { leaveFor } from "@/components/accounts/leave-for";
 import { PasswordField } from "@/components/accounts/password-field";
 import { textOf } from "@/components/accounts/refusal";
+import { Refused } from "@/components/accounts/refused";
 import { signIn } from "@/components/accounts/session-calls";
 import { useForm } from "@/components/accounts/use-form";
 import { Button } from "@/components/ui/button";
 import { TextField } from "@/components/ui/field";
-import { Notice } from "@/components/ui/notice";
 import type { DemoSignIn } from "@/lib/schemas/accounts";
 
 type SignInFormProps = { next: string; email?: string; demo?: readonly DemoSignIn[]; mailSinkUrl?: string | null };
@@ -32,7 +32,7 @@ export function SignInForm({ next, email = "", demo, mailSinkUrl }: SignInFormPr
   return (
     <>
       <form ref={ref} {...formProps} className="grid gap-4">
-        {refusal && <Notice kind="error" title={refusal.sentence} />}
+        <Refused refusal={refusal} />
         <TextField name="email" label="E-mail address" type="email" autoComplete="username" inputMode="email" defaultValue={email} required />
         <PasswordField name="password" label="Password" kind="old" />
         <div className="flex flex-wrap items-center justify-between gap-3">

@@ -26,7 +26,7 @@ export function WhoMenu({ name, roleLabel, organisation, current, posts }: WhoMe
         className="flex min-h-11 items-center gap-2 rounded px-2 text-left text-[0.95rem] leading-tight text-deep-soft hover:text-deep-ink"
       >
         <span className="grid">
-          <span className="font-semibold text-deep-ink sm:inline">{name}</span>
+          <span className="max-w-[46vw] truncate font-semibold text-deep-ink sm:max-w-none">{name}</span>
           <span className="max-w-[42vw] truncate text-[0.85rem] sm:max-w-none">
             {roleLabel}
             <span className="hidden sm:inline">, {organisation}</span>
@@ -35,7 +35,7 @@ export function WhoMenu({ name, roleLabel, organisation, current, posts }: WhoMe
         <svg viewBox="0 0 12 8" width="12" height="8" aria-hidden className="shrink-0">
           <path d="M1 1.5 6 6.5 11 1.5" fill="none" stroke="currentColor" strokeWidth="2" />
         </svg>
-        <span className="sr-only">: account, roles, colours, sign out</span>
+        <span className="sr-only">: your menu</span>
       </button>
       <div
         id="who-menu"

@@ -33,10 +33,10 @@ export function Rail({ home, places, who }: RailProps) {
         aria-label="Places"
         data-on-deep
         data-no-print
-        className="fixed inset-x-0 bottom-0 z-20 grid auto-cols-fr grid-flow-col bg-deep pb-[env(safe-area-inset-bottom)] text-deep-ink md:hidden"
+        className="fixed inset-x-0 bottom-0 z-20 flex bg-deep pb-[env(safe-area-inset-bottom)] text-deep-ink md:hidden"
       >
         {places.map((place) => (
-          <RailPlace key={place.href} place={place} className="min-h-15 justify-center border-t-4 px-0.5 text-center" edge="border-t-line" />
+          <RailPlace key={place.href} place={place} className="min-h-15 flex-auto justify-center border-t-4 px-1 text-center" edge="border-t-line" />
         ))}
       </nav>
     </>

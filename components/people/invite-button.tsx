@@ -3,13 +3,13 @@
 import { useRouter } from "next/navigation";
 import { useState } from "react";
 import { textOf } from "@/components/accounts/refusal";
+import { Refused } from "@/components/accounts/refused";
 import { useForm } from "@/components/accounts/use-form";
 import { api } from "@/components/api/client";
 import { chosenRoles, RoleBoxes, type RoleChoice } from "@/components/people/role-boxes";
 import { Button } from "@/components/ui/button";
 import { Dialog } from "@/components/ui/dialog";
 import { TextField } from "@/components/ui/field";
-import { Notice } from "@/components/ui/notice";
 
 /** The one way in: an invitation by mail. */
 export function InviteButton({ org, roles }: { org: string; roles: readonly RoleChoice[] }) {
@@ -36,7 +36,7 @@ function InviteForm({ org, roles, onSent }: { org: string; roles: readonly RoleC
   });
   return (
     <form {...formProps} className="grid gap-4">
-      {refusal && <Notice kind="error" title={refusal.sentence} />}
+      <Refused refusal={refusal} />
       <TextField name="name" label="Name" autoComplete="off" error={refusal?.fields.name} required />
       <TextField
         name="email"

@@ -4,6 +4,7 @@ import { useMutation } from "@tanstack/react-query";
 import { useRouter } from "next/navigation";
 import { useState } from "react";
 import { leaveFor } from "@/components/accounts/leave-for";
+import { Refused } from "@/components/accounts/refused";
 import { useForm } from "@/components/accounts/use-form";
 import { api } from "@/components/api/client";
 import type { Member } from "@/components/people/members";
@@ -47,7 +48,7 @@ function RolesForm({ org, roles, member, onDone }: PartProps) {
   });
   return (
     <form {...formProps} className="grid gap-4">
-      {refusal && <Notice kind="error" title={refusal.sentence} />}
+      <Refused refusal={refusal} />
       <RoleBoxes roles={roles} chosen={member.roles} error={refusal?.fields.roles} />
       <Button type="submit" kind="main" disabled={busy} className="justify-self-start">
         {busy ? "Saving" : "Save the roles"}

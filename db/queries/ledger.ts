@@ -1,5 +1,6 @@
 import type { Knex } from "knex";
 import type { Db } from "@/db/client";
+import type { SaltedValue } from "@/lib/core/ledger/entry";
 
 export type LedgerRow = { leafIndex: number; kind: string; canonical: string; leafHash: string; recordedAt: Date };
 
@@ -18,7 +19,7 @@ export async function nextLeafIndex(trx: Knex.Transaction, organisationId: strin
 
 export async function insertLedgerEntry(
   trx: Knex.Transaction,
-  entry: { organisationId: string; leafIndex: number; kind: string; canonical: string; leafHash: string },
+  entry: { organisationId: string; leafIndex: number; kind: string; canonical: string; leafHash: string; recordedAt: string },
 ): Promise<void> {
   await trx("ledger_entries").insert({
     organisation_id: entry.organisationId,
@@ -26,16 +27,15 @@ export async function insertLedgerEntry(
     kind: entry.kind,
     canonical: entry.canonical,
     leaf_hash: entry.leafHash,
+    recorded_at: entry.recordedAt,
   });
 }
-
-export type ErasableValue = { personId: string; label: string; value: string; salt: string };
 
 /** Keeps personal values beside an entry whose canonical form holds only their salted hashes. */
 export async function insertErasableValues(
   trx: Knex.Transaction,
   entry: { organisationId: string; leafIndex: number },
-  values: ErasableValue[],
+  values: SaltedValue[],
 ): Promise<void> {
   if (values.length === 0) return;
   await trx("erasable_values").insert(

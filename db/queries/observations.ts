@@ -8,6 +8,7 @@ export type Sheet = {
   apprenticeId: string;
   apprenticeName: string;
   workshopId: string;
+  workshopSlug: string;
   assessorId: string;
   taskId: string;
   taskRevisionId: string;
@@ -25,12 +26,14 @@ const sheets = (db: Db, organisationId: string, id: string) =>
   db("observations as o")
     .join("task_revisions as r", "r.id", "o.task_revision_id")
     .join("people as p", "p.id", "o.apprentice_id")
+    .join("organisations as w", "w.id", "o.workshop_id")
     .select(
       "o.id",
       "o.organisation_id",
       "o.apprentice_id",
       "p.name as apprentice_name",
       "o.workshop_id",
+      "w.slug as workshop_slug",
       "o.assessor_id",
       "o.task_id",
       "o.task_revision_id",
@@ -51,6 +54,7 @@ const toSheet = (row: Awaited<ReturnType<typeof sheets>>[number]): Sheet => ({
   apprenticeId: row.apprentice_id,
   apprenticeName: row.apprentice_name,
   workshopId: row.workshop_id,
+  workshopSlug: row.workshop_slug,
   assessorId: row.assessor_id,
   taskId: row.task_id,
   taskRevisionId: row.task_revision_id,

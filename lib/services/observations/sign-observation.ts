@@ -7,6 +7,7 @@ import { findReader, listMentorsConcerned } from "@/db/reads/sign-off-readers";
 import { addMonths } from "@/lib/core/dates";
 import { assertAllowed } from "@/lib/core/decision";
 import { AppError } from "@/lib/core/errors";
+import { signOffEntry } from "@/lib/core/ledger/sign-off-entry";
 import { signedOffLetter, signedOffMentorLetter } from "@/lib/core/letters/signed-off";
 import type { Actor } from "@/lib/core/roles";
 import { LEVEL_LABEL, type Level, type Outcome } from "@/lib/core/tasks/types";
@@ -78,31 +79,22 @@ function decidedLevel({ outcome, cap }: ComputedSheet, level: Level | null): Lev
 }
 
 function entryOf(actor: Actor, sheet: Sheet, computed: ComputedSheet, level: Level | null, feedback: string) {
-  const remarks = computed.marks
-    .filter((mark) => mark.remark !== "")
-    .map((mark) => ({ personId: sheet.apprenticeId, label: `remark:${mark.key}`, value: mark.remark }));
-  return {
-    kind: "sign_off" as const,
-    subject: {
-      observationId: sheet.id,
-      taskId: sheet.taskId,
-      taskRevision: sheet.revisionNumber,
-      taskContentHash: sheet.contentHash,
-      outcome: computed.outcome.outcome,
-      level,
-      stoppedForSafety: sheet.stoppedReason !== null,
-      marks: computed.marks.map(({ key, mark, reading, prompts }) => ({ key, mark, reading, prompts })),
-      startedAt: sheet.startedAt.toISOString(),
-    },
-    personal: [
-      { personId: sheet.apprenticeId, label: "apprentice", value: sheet.apprenticeName },
-      { personId: actor.personId, label: "assessor", value: actor.name },
-      { personId: sheet.apprenticeId, label: "vehicle", value: sheet.vehicle },
-      { personId: sheet.apprenticeId, label: "job_card", value: sheet.jobCardNumber },
-      ...(feedback ? [{ personId: sheet.apprenticeId, label: "feedback", value: feedback }] : []),
-      ...remarks,
-    ],
-  };
+  return signOffEntry({
+    observationId: sheet.id,
+    taskId: sheet.taskId,
+    taskRevision: sheet.revisionNumber,
+    taskContentHash: sheet.contentHash,
+    outcome: computed.outcome.outcome,
+    level,
+    stoppedForSafety: sheet.stoppedReason !== null,
+    marks: computed.marks,
+    startedAt: sheet.startedAt.toISOString(),
+    apprentice: { personId: sheet.apprenticeId, name: sheet.apprenticeName },
+    assessor: { personId: actor.personId, name: actor.name },
+    vehicle: sheet.vehicle,
+    jobCardNumber: sheet.jobCardNumber,
+    feedback,
+  });
 }
 
 async function writeLetters(
@@ -122,7 +114,7 @@ async function writeLetters(
     reasons: computed.outcome.reasons.map((reason) => reason.text),
     feedback: of.feedback,
     assessor: actor.name,
-    address: `${env().APP_URL}/sign-offs/${of.signOffId}`,
+    address: `${env().APP_URL}/o/${sheet.workshopSlug}/sign-offs/${of.signOffId}`,
   };
   if (apprentice) await postLetter(trx, signedOffLetter({ ...said, to: apprentice.email, name: apprentice.name }));
   for (const mentor of mentors) {

@@ -19,6 +19,7 @@ export type SignOffFact = {
 export type ProgressFact = {
   apprenticeId: string;
   taskId: string;
+  /** A module of the person's workshop or college of today opens the task. */
   hasModule: boolean;
   knowledgeMet: boolean;
   practiceRuns: number;
@@ -63,7 +64,12 @@ export async function listProgressFacts(db: Db, scope: Scope): Promise<ProgressF
   const { rows } = await db.raw(
     `WITH pair AS (
        SELECT apprentice_id, task_id FROM unnest(:apprenticeIds::uuid[]) AS apprentice_id CROSS JOIN unnest(:taskIds::uuid[]) AS task_id),
-     opens AS (SELECT DISTINCT task_id FROM module_revision_tasks WHERE task_id = ANY(:taskIds)),
+     opens AS (
+       SELECT DISTINCT a.apprentice_id, t.task_id FROM module_revision_tasks t
+       JOIN module_revisions m ON m.id = t.module_revision_id
+       JOIN training_agreements a ON m.organisation_id IN (a.workshop_id, a.college_id)
+       WHERE a.apprentice_id = ANY(:apprenticeIds) AND t.task_id = ANY(:taskIds)
+         AND daterange(a.starts_on, a.ends_on, '[]') @> current_date),
      known AS (
        SELECT DISTINCT a.apprentice_id, t.task_id FROM assignments a
        JOIN module_revision_tasks t ON t.module_revision_id = a.module_revision_id
@@ -77,7 +83,7 @@ export async function listProgressFacts(db: Db, scope: Scope): Promise<ProgressF
      SELECT pair.apprentice_id, pair.task_id, opens.task_id IS NOT NULL AS has_module, known.task_id IS NOT NULL AS knowledge_met,
        coalesce(runs.n, 0) AS practice_runs, coalesce(photos.n, 0) AS evidence_photos, r.declared_at, r.booked_for
      FROM pair
-     LEFT JOIN opens USING (task_id)
+     LEFT JOIN opens USING (apprentice_id, task_id)
      LEFT JOIN known USING (apprentice_id, task_id)
      LEFT JOIN runs USING (apprentice_id, task_id)
      LEFT JOIN photos USING (apprentice_id, task_id)

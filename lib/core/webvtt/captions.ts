@@ -20,5 +20,14 @@ export function readCaptions(text: string, durationMs: number): { vtt: string } 
     .map((cue): LineProblem => ({ line: cue.line, message: "This caption begins after the end of the film." }));
   const empty = cues.length === 0 && problems.length === 0 ? [{ line: 1, message: "There are no captions in this file." }] : [];
   const found = [...problems, ...late, ...empty];
-  return found.length > 0 ? { problems: found } : { vtt };
+  const moved = movedLines(text);
+  return found.length > 0 ? { problems: found.map(({ line, message }) => ({ line: Math.max(1, line - moved), message })) } : { vtt };
+}
+
+/** How many lines further down a line of SubRip stands once it is WebVTT: a problem is told by its line in the file that was given. */
+function movedLines(text: string): number {
+  const plain = text.replace(/^\uFEFF/, "").replace(/\r\n?/g, "\n");
+  if (plain.startsWith("WEBVTT")) return 0;
+  const leading = /^\s*/.exec(plain)?.[0] ?? "";
+  return 2 - (leading.match(/\n/g)?.length ?? 0);
 }

@@ -2,7 +2,8 @@ import canonicalize from "canonicalize";
 
 /**
  * Canonical JSON: the one text that a value has, so that its hash means the same everywhere.
- * @throws TypeError for what JSON can't carry: undefined, functions, NaN or infinity, lone surrogates.
+ * @throws TypeError for what JSON can't carry: undefined, functions, NaN or infinity, lone surrogates, and objects of a class (a Date, a
+ *         Map), which JSON would change or empty.
  * @source RFC 8785 (JSON Canonicalization Scheme)
  */
 export function canonicalJson(value: unknown): string {
@@ -22,8 +23,10 @@ function assertJson(value: unknown, path: string): void {
   } else if (typeof value === "number") {
     if (!Number.isFinite(value)) throw new TypeError(`${path}: ${value} is no JSON number.`);
   } else if (Array.isArray(value)) {
-    value.forEach((item, index) => assertJson(item, `${path}[${index}]`));
+    // By index, since forEach passes over holes.
+    for (let index = 0; index < value.length; index += 1) assertJson(value[index], `${path}[${index}]`);
   } else if (value !== null && typeof value === "object") {
+    if (!isPlain(value)) throw new TypeError(`${path}: only plain objects can be written as JSON.`);
     for (const [key, item] of Object.entries(value)) {
       assertJson(key, `${path} key`);
       assertJson(item, `${path}.${key}`);
@@ -31,4 +34,9 @@ function assertJson(value: unknown, path: string): void {
   } else if (value !== null && typeof value !== "boolean") {
     throw new TypeError(`${path}: ${typeof value} can't be written as JSON.`);
   }
+}
+
+function isPlain(value: object): boolean {
+  const prototype: unknown = Object.getPrototypeOf(value);
+  return (prototype === null || prototype === Object.prototype) && !("toJSON" in value);
 }

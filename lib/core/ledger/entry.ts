@@ -18,11 +18,14 @@ const ENTRY_VERSION = 1;
 /**
  * The entry as it stands in the ledger: its one canonical text (RFC 8785) and the hash of that text as a leaf (RFC 6962).
  * @param at.recordedAt  ISO 8601 moment in UTC
+ * @throws RangeError when two personal values bear one label: the second would drop out unseen
  */
 export function ledgerEntry(
   entry: { kind: LedgerKind; subject: Record<string, unknown>; personal: SaltedValue[] },
   at: { organisationId: string; leafIndex: number; recordedAt: string },
 ): { canonical: string; leafHash: string } {
+  const labels = entry.personal.map(({ label }) => label);
+  if (new Set(labels).size !== labels.length) throw new RangeError("Two personal values of one entry bear the same label.");
   const canonical = canonicalJson({
     version: ENTRY_VERSION,
     ...at,

@@ -18,6 +18,9 @@ function splitPoint(n: number): number {
   return k;
 }
 
+/** Exact for every safe integer, as a rounded logarithm is not. */
+const isPowerOfTwo = (n: number): boolean => 2 ** Math.round(Math.log2(n)) === n;
+
 function rootOf(leaves: Uint8Array[]): Uint8Array {
   const [only] = leaves;
   if (only === undefined) return sha256Bytes();
@@ -88,10 +91,9 @@ export function consistencyProof(size: number, leafHashes: string[]): string[] {
 export function verifyConsistency(of: { size1: number; size2: number; root1: string; root2: string; proof: string[] }): boolean {
   const { size1, size2, root1, root2, proof } = of;
   if (!Number.isSafeInteger(size1) || !Number.isSafeInteger(size2) || size1 < 1 || size2 < size1) return false;
-  if (![root1, root2, ...proof].every(isHash)) return false;
   if (size1 === size2) return proof.length === 0 && root1 === root2;
-  const isPowerOfTwo = Number.isInteger(Math.log2(size1));
-  const [seed, ...rest] = (isPowerOfTwo ? [root1, ...proof] : proof).map(hexToBytes);
+  if (![root1, root2, ...proof].every(isHash)) return false;
+  const [seed, ...rest] = (isPowerOfTwo(size1) ? [root1, ...proof] : proof).map(hexToBytes);
   if (seed === undefined) return false;
   let node = size1 - 1;
   let last = size2 - 1;

@@ -1,5 +1,7 @@
 import { getDb } from "@/db/client";
-import { findOpenUploadOf, insertUpload, listOpenUploads, lockUploadsOf, newUploadId } from "@/db/queries/uploads";
+import {
+  endUpload, findOpenUploadOf, findUploadForUpdate, insertUpload, listOpenUploads, lockUploadsOf, newUploadId, type Upload,
+} from "@/db/queries/uploads";
 import { assertAllowed } from "@/lib/core/decision";
 import { AppError } from "@/lib/core/errors";
 import type { Actor } from "@/lib/core/roles";
@@ -26,7 +28,8 @@ export async function startUpload(actor: Actor, input: StartUploadInput): Promis
   const organisationId = actor.organisation.id;
   const mark = { organisationId, personId: actor.personId, ...input };
   const begun = await findOpenUploadOf(db, mark);
-  if (begun) return describeUpload(begun);
+  const known = begun && (await describeOrEnd(begun));
+  if (known) return known;
 
   const id = await newUploadId(db);
   const storeKey =
@@ -58,4 +61,18 @@ function assertNotTooLarge({ purpose, sizeBytes }: StartUploadInput): void {
   if (sizeBytes <= limit) return;
   const [size, most] = [sizeBytes, limit].map((bytes) => (bytes >= 1e9 ? `${(bytes / 1e9).toFixed(1)} GB` : `${Math.ceil(bytes / 1e6)} MB`));
   throw new AppError("too_large", `The file has ${size}; at most ${most} can be taken.`);
+}
+
+/** The upload as it is, or undefined after ending it if the store has dropped its parts: it is begun anew then. */
+async function describeOrEnd(upload: Upload): Promise<UploadView | undefined> {
+  try {
+    return await describeUpload(upload);
+  } catch (error) {
+    if (!(error instanceof AppError && error.code === "gone")) throw error;
+    await getDb().transaction(async (trx) => {
+      const locked = await findUploadForUpdate(trx, upload.organisationId, upload.id);
+      if (locked?.state === "open") await endUpload(trx, upload.id, "aborted");
+    });
+    return undefined;
+  }
 }

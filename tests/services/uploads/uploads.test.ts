@@ -55,6 +55,17 @@ test("the same file picked again goes on; another date of change is another file
   expect((await startUpload(colleague, file)).uploadId).not.toBe(first.uploadId);
 });
 
+test("a file whose parts the store has dropped is begun anew", async () => {
+  const mentor = await createMember(await createOrganisation(), "mentor");
+  const file = someFile(100);
+  const first = await startUpload(mentor, file);
+  const row = await db()("uploads").where({ id: first.uploadId }).first();
+  await getStore().abortMultipart(row.store_key, row.store_upload_id);
+  const second = await startUpload(mentor, file);
+  expect(second).toMatchObject({ state: "open", receivedParts: [] });
+  expect(second.uploadId).not.toBe(first.uploadId);
+});
+
 test("two tabs that start with one file at once share one upload, and nothing is left open in the store", async () => {
   const mentor = await createMember(await createOrganisation(), "mentor");
   const file = someFile(100);

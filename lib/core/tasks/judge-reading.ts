@@ -1,3 +1,4 @@
+import { AppError } from "@/lib/core/errors";
 import type { ReadingSpec, TakenReading } from "@/lib/core/tasks/types";
 import { convert } from "@/lib/core/units/convert";
 import { formatValue } from "@/lib/core/units/format-value";
@@ -12,9 +13,10 @@ const NEAR_RESOLUTIONS = 2;
  * Compares a reading with its limits (simple acceptance: the limits as they are, JCGM 106:2012). A *set* reading is decided by them. Of
  * a *found* one the program says what the value means; the assessor judges measuring and conclusion. Either way an instrument that is
  * out of date can't make a reading met.
- * @throws AppError("invalid_input") when the unit is of another quantity
+ * @throws AppError("invalid_input") when the unit is of another quantity, or the value is no number
  */
 export function judgeReading(spec: ReadingSpec, reading: TakenReading): JudgedReading {
+  if (!Number.isFinite(reading.value)) throw new AppError("invalid_input", "A reading is a number with its unit.");
   const value = convert(reading.value, reading.unit, spec.unit);
   const { distance, side } = distanceInside(spec, value);
   const verdict = distance < 0 ? "outside" : spec.mode === "found" && distance <= NEAR_RESOLUTIONS * spec.resolution ? "near" : "inside";

@@ -27,7 +27,8 @@ export function levelCap(of: {
     caps.push({ level: CAP_WITHOUT_LICENCE, reason: `The licence “${rule.licence}” is not on record.` });
   }
   if (rule.minimumAgeAlone !== null && (of.ageYears === null || of.ageYears < rule.minimumAgeAlone)) {
-    caps.push({ level: CAP_TOO_YOUNG, reason: `Under ${rule.minimumAgeAlone}: a mentor stays alongside.` });
+    const why = of.ageYears === null ? `No date of birth on record to show an age of ${rule.minimumAgeAlone}` : `Under ${rule.minimumAgeAlone}`;
+    caps.push({ level: CAP_TOO_YOUNG, reason: `${why}: a mentor stays alongside.` });
   }
   for (const level of LEVELS) {
     const lacking = lackingFor(level, of);
@@ -43,7 +44,7 @@ export function levelCap(of: {
 function lackingFor(level: Level, of: { rule: TaskRule; metObservations: { vehicle: string; assessorId: string }[] }): string | null {
   const need = of.rule.levelNeeds.find((candidate) => candidate.level === level);
   if (!need) return null;
-  const vehicles = new Set(of.metObservations.map((observation) => observation.vehicle.trim().toLowerCase())).size;
+  const vehicles = new Set(of.metObservations.map((observation) => plateOf(observation.vehicle))).size;
   const assessors = new Set(of.metObservations.map((observation) => observation.assessorId)).size;
   const count = (n: number, needed: number, noun: string) => (n >= needed ? [] : [`${needed} ${noun} (${n} so far)`]);
   const lacking = [
@@ -53,3 +54,6 @@ function lackingFor(level: Level, of: { rule: TaskRule; metObservations: { vehic
   ];
   return lacking.length === 0 ? null : lacking.join(", ");
 }
+
+/** "AB12 CDE" and "ab12cde" are one vehicle. */
+const plateOf = (vehicle: string): string => vehicle.normalize("NFKC").toUpperCase().replace(/[^\p{L}\p{N}]/gu, "");

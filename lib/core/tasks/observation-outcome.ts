@@ -13,8 +13,8 @@ export type ObservationOutcome = {
 const isRequired = (criterion: Criterion): boolean => criterion.required || criterion.safetyCritical;
 
 /**
- * The outcome of a sheet: met needs every required criterion met. "Not seen" is never met, a *set* reading decides for itself, and work
- * that was stopped for safety is not yet, whatever else was seen; what was not reached then need not be filled in.
+ * The outcome of a sheet: met needs every required criterion met. "Not seen" is never met, a reading that was asked for must have been
+ * taken, a *set* one decides for itself, and work that was stopped for safety is not yet, whatever else was seen; what was not reached then need not be filled in.
  */
 export function observationOutcome(content: TaskContent, marks: CriterionMark[], stoppedReason: string | null): ObservationOutcome {
   const byKey = new Map(marks.map((mark) => [mark.key, mark]));
@@ -37,6 +37,6 @@ function reasonAgainst(criterion: Criterion, mark: CriterionMark): string | null
   const judged = criterion.reading && mark.reading ? judgeReading(criterion.reading, mark.reading) : null;
   if (judged && !judged.canBeMet) return judged.sentence;
   if (mark.mark === "not_yet") return mark.remark === "" ? "not yet." : `not yet. ${mark.remark}`;
-  if (criterion.reading?.mode === "set" && !mark.reading) return "no reading was taken.";
+  if (criterion.reading && !mark.reading) return "no reading was taken.";
   return null;
 }

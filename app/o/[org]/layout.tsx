@@ -1,6 +1,7 @@
 import type { ReactNode } from "react";
 import { MemberRail } from "@/components/accounts/member-rail";
 import { QueryProvider } from "@/components/api/query-provider";
+import { UploadStrip } from "@/components/upload/upload-strip";
 import { findActor, findSignedIn } from "@/lib/auth/actor";
 import { viewFrame } from "@/lib/services/frame/view-frame";
 
@@ -13,6 +14,7 @@ export default async function OrganisationLayout({ children, params }: { childre
   return (
     <QueryProvider>
       <MemberRail frame={await viewFrame(actor)} />
+      {actor.roles.has("mentor") && <UploadStrip org={org} />}
       {children}
     </QueryProvider>
   );

@@ -1,4 +1,41 @@
+import { z } from "zod";
 import type { DoorSpec } from "@/lib/schemas/contract/door-spec";
+import { importMarkingSchema, markingSchema } from "@/lib/schemas/marking";
 
-/** Doors of marking. */
-export const markingDoors = {} as const satisfies Record<string, DoorSpec>;
+const recordingParams = z.object({ org: z.string(), recordingId: z.uuid() });
+
+/** Doors of marking out a recording: steps, facts and questions, also as WebVTT. */
+export const markingDoors = {
+  "GET /orgs/{org}/recordings/{recordingId}/marking": {
+    summary: "Steps and questions of a recording",
+    roles: ["mentor"],
+    params: recordingParams,
+    response: markingSchema,
+  },
+  "PUT /orgs/{org}/recordings/{recordingId}/marking": {
+    summary: "Save the marking out as a whole",
+    roles: ["mentor"],
+    params: recordingParams,
+    body: markingSchema,
+    response: z.object({ version: z.int() }),
+  },
+  "GET /orgs/{org}/recordings/{recordingId}/chapters.vtt": {
+    summary: "Steps as a WebVTT chapters track",
+    roles: ["mentor"],
+    params: recordingParams,
+    response: { file: "text/vtt" },
+  },
+  "GET /orgs/{org}/recordings/{recordingId}/questions.vtt": {
+    summary: "Facts and questions as a WebVTT metadata track",
+    roles: ["mentor"],
+    params: recordingParams,
+    response: { file: "text/vtt" },
+  },
+  "POST /orgs/{org}/recordings/{recordingId}/marking/imports": {
+    summary: "Take steps, facts and questions from WebVTT, whole or not at all",
+    roles: ["mentor"],
+    params: recordingParams,
+    body: importMarkingSchema,
+    response: markingSchema,
+  },
+} as const satisfies Record<string, DoorSpec>;

@@ -43,3 +43,9 @@ export function daysBetween(fromIsoDay: string, toIsoDay: string): number {
   };
   return Math.round((at(toIsoDay) - at(fromIsoDay)) / 86_400_000);
 }
+
+/** The day that many days later; earlier for a negative number. */
+export function addDays(isoDay: string, days: number): string {
+  const { year, month, day } = partsOf(isoDay);
+  return new Date(Date.UTC(year, month - 1, day + days)).toISOString().slice(0, 10);
+}

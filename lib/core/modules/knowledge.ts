@@ -24,7 +24,7 @@ export function knowledgeStanding(
   latestRight: ReadonlyMap<string, boolean>,
   seenShare: ReadonlyMap<string, number>,
 ): KnowledgeStanding {
-  const unseen = content.steps.filter((step) => (seenShare.get(step.id) ?? 0) < SEEN_SHARE);
+  const unseen = content.steps.filter((step) => !((seenShare.get(step.id) ?? 0) >= SEEN_SHARE));
   const right = content.questions.filter((question) => latestRight.get(question.id) === true).length;
   const questions = content.questions.length;
   const safetyOpen = content.questions.filter((question) => question.safetyCritical && latestRight.get(question.id) !== true);

@@ -1,4 +1,5 @@
 import type { ModuleContent } from "@/lib/core/modules/types";
+import { questionProblems } from "@/lib/core/questions/question-problems";
 
 /** What keeps a module's own content from being published, as sentences; empty when nothing does. */
 export function moduleProblems(content: ModuleContent): string[] {
@@ -8,12 +9,10 @@ export function moduleProblems(content: ModuleContent): string[] {
   if (content.questions.length === 0) problems.push("Ask at least one question: a film alone opens no task.");
   if (!(content.passRule.share >= 0 && content.passRule.share <= 1)) problems.push("The share of questions lies between 0 and 100 %.");
   const steps = new Map(content.steps.map((step) => [step.id, step]));
+  if (steps.size < content.steps.length) problems.push("A step can stand in a module once.");
   for (const question of content.questions) {
-    const step = steps.get(question.stepId);
-    if (!step) problems.push(`“${question.prompt}” belongs to a step that is not in this module.`);
-    else if (question.atMs < step.startMs || question.atMs > step.endMs) {
-      problems.push(`“${question.prompt}” is asked outside its step “${step.title}”. Move it on the bench.`);
-    }
+    const name = question.prompt.trim() === "" ? "A question" : `“${question.prompt}”`;
+    problems.push(...questionProblems(question, steps.get(question.stepId)).map((problem) => `${name}: ${problem}`));
   }
   return problems;
 }

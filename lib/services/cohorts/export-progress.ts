@@ -1,4 +1,5 @@
 import { stringify } from "csv-stringify/sync";
+import { RFC_4180 } from "@/lib/core/csv/rfc4180";
 import { safeCell } from "@/lib/core/csv/safe-cell";
 import type { Actor } from "@/lib/core/roles";
 import { standingLabel } from "@/lib/core/standing/standing-label";
@@ -25,5 +26,5 @@ export async function exportProgress(actor: Actor, cohortId: string): Promise<{ 
       return cells.map(safeCell);
     }),
   );
-  return { fileName: `${name.toLowerCase().replace(/[^a-z0-9]+/g, "-")}-progress.csv`, csv: stringify([HEADER, ...rows], { record_delimiter: "\r\n" }) };
+  return { fileName: `${name.toLowerCase().replace(/[^a-z0-9]+/g, "-")}-progress.csv`, csv: stringify([HEADER, ...rows], RFC_4180) };
 }

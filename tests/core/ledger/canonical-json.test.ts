@@ -36,7 +36,7 @@ test.each([
   ["undefined", undefined],
   ["an undefined member", { a: undefined }],
   ["undefined in a list", [1, undefined]],
-  ["a hole in a list", [1, , 2]], // eslint-disable-line no-sparse-arrays
+  ["a hole in a list", [1, , 2]],
   ["NaN", { a: Number.NaN }],
   ["infinity", [Number.NEGATIVE_INFINITY]],
   ["a big integer", { a: 1n }],

@@ -1,4 +1,4 @@
-import { closeSync, existsSync, mkdirSync, openSync } from "node:fs";
+import { closeSync, mkdirSync, openSync } from "node:fs";
 import { join } from "node:path";
 import { lastLines } from "./children.mjs";
 import { run } from "./programs.mjs";
@@ -33,7 +33,6 @@ export async function migrateDatabase(ground) {
 
 /** @param {Ground} ground */
 export async function loadDemo(ground) {
-  if (!existsSync(join(ground.root, "lib/cli/load-demo.ts"))) return "none yet";
   const output = await runScript(ground, "demo", "lib/cli/load-demo.ts");
   return output.split("\n").at(-1);
 }

@@ -15,18 +15,11 @@ import { assertAllowed } from "@/lib/core/decision";
 import { AppError } from "@/lib/core/errors";
 import { revisionHash } from "@/lib/core/modules/revision-hash";
 import type { Actor } from "@/lib/core/roles";
-import { wilsonInterval } from "@/lib/core/statistics/wilson";
+import { firstTimeRight, type FirstTimeRight } from "@/lib/core/statistics/first-time-right";
 import { canWriteModules } from "@/lib/policies/modules";
 import { draftContent, publishProblems } from "@/lib/services/modules/publish-module";
 
-export type UnderstoodQuestion = {
-  id: string;
-  prompt: string;
-  safetyCritical: boolean;
-  answers: number;
-  right: number;
-  interval: { low: number; high: number } | null;
-};
+export type UnderstoodQuestion = { id: string; prompt: string; safetyCritical: boolean; first: FirstTimeRight };
 
 export type ModuleView = {
   moduleId: string;
@@ -75,7 +68,7 @@ export async function viewModule(actor: Actor, moduleId: string): Promise<Module
     apprentices: trainees.map((trainee) => ({ id: trainee.personId, name: trainee.name })),
     understood: (newest?.content.questions ?? content.questions).map((question) => {
       const { answers, right } = first.get(question.id) ?? { answers: 0, right: 0 };
-      return { id: question.id, prompt: question.prompt, safetyCritical: question.safetyCritical, answers, right, interval: wilsonInterval(right, answers) };
+      return { id: question.id, prompt: question.prompt, safetyCritical: question.safetyCritical, first: firstTimeRight(right, answers) };
     }),
   };
 }

@@ -109,6 +109,17 @@ test("a tree only ever grows: every earlier size is shown to be its beginning", 
   );
 });
 
+// Source: RFC 9162, 2.1.3.2 and 2.1.4.2, "if sn is 0, then stop … and fail": a path longer than the tree is deep proves nothing.
+test("a larger tree's path is not taken for a smaller tree's", () => {
+  const [first = "", second = ""] = leaves;
+  const two = treeRoot([first, second]);
+  expect(verifyInclusion({ index: 0, size: 1, leaf: second, proof: [first], root: two })).toBe(false);
+  // From 7 to 8 leaves is from 3 to 4 on the right, and one hash more.
+  const grown = { size1: 7, size2: 8, root1: treeRoot(leaves.slice(0, 7)), root2: treeRoot(leaves), proof: consistencyProof(7, leaves) };
+  expect(verifyConsistency(grown)).toBe(true);
+  expect(verifyConsistency({ ...grown, size1: 3, size2: 4 })).toBe(false);
+});
+
 test("there is no proof for a leaf or a size that isn't there", () => {
   const eight = leaves.slice(0, 8);
   for (const index of [-1, 8, 0.5, Number.NaN]) expect(() => inclusionProof(index, eight)).toThrow(RangeError);

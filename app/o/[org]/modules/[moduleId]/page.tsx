@@ -101,7 +101,7 @@ function Holders({ module }: { module: ModuleView }) {
   );
 }
 
-/** First answers only: what somebody knew before going back. With fewer than 30 no share is shown, only the counts. */
+/** First answers only: what somebody knew before going back. */
 function Understood({ questions }: { questions: ModuleView["understood"] }) {
   const percent = (share: number) => Math.round(share * 100);
   return (
@@ -110,10 +110,11 @@ function Understood({ questions }: { questions: ModuleView["understood"] }) {
         <li key={question.id} className="border-b border-rule py-2 last:border-b-0">
           {question.prompt} {question.safetyCritical && <Tag kind="safety">safety</Tag>}
           <span className="block text-ink2">
-            first answers: <Value>{`${question.right} of ${question.answers}`}</Value> right
-            {question.interval && question.answers >= 30 && (
+            first answers: <Value>{`${question.first.right} of ${question.first.answers}`}</Value> right
+            {question.first.share && (
               <>
-                , <Value>{`${percent(question.interval.low)}–${percent(question.interval.high)} %`}</Value> (95 % interval)
+                , <Value>{`${percent(question.first.share.low)}–${percent(question.first.share.high)} %`}</Value> (95 % interval
+                {question.first.trust === "with_caution" ? ", few answers" : ""})
               </>
             )}
           </span>

@@ -5,7 +5,7 @@ import { Button } from "@/components/ui/button";
 import { addUploads } from "@/components/upload/running-uploads";
 
 /** Where films come in: picked, dropped, or filmed now on a phone. */
-export function AddRecording({ org }: { org: string }) {
+export function AddRecording({ org, isFirst }: { org: string; isFirst: boolean }) {
   const picker = useRef<HTMLInputElement>(null);
   const camera = useRef<HTMLInputElement>(null);
   const [isOver, setIsOver] = useState(false);
@@ -31,8 +31,9 @@ export function AddRecording({ org }: { org: string }) {
         add(event.dataTransfer.files);
       }}
     >
-      <p className="font-plate text-[1.4rem] font-semibold leading-tight">Add a recording</p>
+      <h2 className="text-[1.4rem] leading-tight">{isFirst ? "No recordings yet" : "Add a recording"}</h2>
       <p className="max-w-[62ch] text-ink2">
+        {isFirst && "Film a job while you talk it through, then add the film here; it is marked out into steps afterwards. "}
         One film of one job on one vehicle, as the phone or camera saved it. It may be large: you can go on to other pages, and after a reload pick the
         same file again to go on where it stopped.
       </p>

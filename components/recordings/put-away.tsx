@@ -18,7 +18,7 @@ export function PutAway({ org, recordingId }: { org: string; recordingId: string
   );
   return (
     <>
-      <Button kind="quiet" onClick={() => setIsOpen(true)}>
+      <Button kind="quiet" className="-ml-4" onClick={() => setIsOpen(true)}>
         Put away
       </Button>
       <Dialog open={isOpen} onClose={() => setIsOpen(false)} title="Put this recording away?">

@@ -54,7 +54,7 @@ export function RecordingSheet({ org, first, firstMedia, vehicles }: RecordingSh
       />
       <div className="grid items-start gap-4 lg:grid-cols-[minmax(0,1.6fr)_minmax(20rem,1fr)]">
         <div className="grid gap-4">
-          <Film media={playable} title={recording.title} onStale={() => void signAgain()} />
+          <Film media={playable} title={recording.title} isFailed={recording.state === "failed"} onStale={() => void signAgain()} />
           <Sheet>
             <SheetPart title="Details">
               <DetailsForm org={org} recording={recording} vehicles={vehicles} onKept={() => void refetch()} />

@@ -33,8 +33,8 @@ export function CautionPlate({ caution, children }: { caution: Pick<Caution, "gr
 /** On every screen of a demo organisation that shows a value. */
 export function DemoBanner() {
   return (
-    <p className="border-b border-rule bg-chalk px-4 py-1.5 text-center text-sm text-ink2 sm:px-6">
+    <aside aria-label="Demonstration" className="border-b border-rule bg-chalk px-4 py-1.5 text-center text-sm text-ink2 sm:px-6">
       Demonstration values – invented. Never use on a real vehicle. Maker’s data rules.
-    </p>
+    </aside>
   );
 }

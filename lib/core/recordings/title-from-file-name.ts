@@ -3,7 +3,7 @@ import { formatDay } from "@/lib/core/dates";
 const LONGEST = 200;
 
 /** Names that cameras and phones give by themselves: a short word, then nothing but figures. */
-const BY_A_CAMERA = /^(?:[a-z]{2,5}[ .-]?)?[\d\s.()-]*$/i;
+const BY_A_CAMERA = /^(?:[a-z]{2,5}[ .-]?)?\d[\d\s.()-]*$/i;
 
 /**
  * A first title for a recording, for the mentor to better: the file's name without its ending, or the day where a camera chose the name.

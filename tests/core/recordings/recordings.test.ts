@@ -44,6 +44,7 @@ test.each([
   ["Front brake pads, near side.MOV", "Front brake pads, near side"],
   ["aux_belt__take 2.mp4", "aux belt take 2"],
   ["VID_20261201_101530.mp4", "Recording of Tue 1 Dec 2026"],
+  ["belt.mp4", "belt"],
   ["IMG_4711.MOV", "Recording of Tue 1 Dec 2026"],
   ["20261201.mp4", "Recording of Tue 1 Dec 2026"],
   [".mp4", "Recording of Tue 1 Dec 2026"],

@@ -6,7 +6,6 @@ import { AddRecording } from "@/components/recordings/add-recording";
 import { RefreshWhile } from "@/components/recordings/refresh-while";
 import { UnfinishedUploads } from "@/components/recordings/unfinished-uploads";
 import { DataTable, type Row } from "@/components/ui/data-table";
-import { EmptyPlace } from "@/components/ui/notice";
 import { Tag } from "@/components/ui/tag";
 import { formatDay } from "@/lib/core/dates";
 import { formatClock } from "@/lib/core/webvtt/timestamps";
@@ -37,11 +36,9 @@ export default async function RecordingsPage({ params }: { params: Promise<{ org
       <PageHead title="Recordings" next={nextOf(recordings)} />
       <RefreshWhile active={recordings.some((recording) => recording.state === "processing")} />
       <div className="grid gap-4">
-        <AddRecording org={org} />
+        <AddRecording org={org} isFirst={recordings.length === 0} />
         <UnfinishedUploads org={org} uploads={unfinished} />
-        {recordings.length === 0 ? (
-          <EmptyPlace title="No recordings yet">Film a job while you talk it through, then add the film above. It is marked out into steps here.</EmptyPlace>
-        ) : (
+        {recordings.length > 0 && (
           <Sheet>
             <DataTable
               caption="Recordings"
@@ -61,7 +58,7 @@ function nextOf(recordings: readonly RecordingListItem[]): string {
   const unmarked = recordings.filter((recording) => recording.state === "ready" && recording.steps === 0).length;
   if (failed > 0) return `${failed === 1 ? "One could not be prepared" : `${failed} could not be prepared`}. Open it to see why.`;
   if (unmarked > 0) return `${unmarked === 1 ? "One is ready" : `${unmarked} are ready`} to be marked out.`;
-  return recordings.length === 0 ? "Nothing here yet." : "Every recording that is ready is marked out.";
+  return recordings.length === 0 ? "Add the first one." : "Every recording that is ready is marked out.";
 }
 
 function rowOf(org: string, recording: RecordingListItem): Row {

@@ -1,6 +1,7 @@
 import { canonicalJson } from "@/lib/core/ledger/canonical-json";
 import type { Question } from "@/lib/core/questions/types";
 import type { Step } from "@/lib/core/steps/types";
+import { inFileOrder, repeatedIds } from "@/lib/core/webvtt/line-problems";
 import { readVtt, type LineProblem } from "@/lib/core/webvtt/read-vtt";
 import { formatTimestamp } from "@/lib/core/webvtt/timestamps";
 
@@ -10,7 +11,7 @@ import { formatTimestamp } from "@/lib/core/webvtt/timestamps";
  */
 export type MarkingCue = { line: number; id: string; startMs: number; endMs: number; json: unknown };
 
-/** JSON on one line that can't be taken for a timing: the only place for "-->" in JSON is inside a string, where > may be escaped. */
+/** JSON on one line that can't be taken for a timing: "-->" can only stand inside a string of it, where > may be escaped. */
 const oneLine = (value: unknown): string => canonicalJson(value).replaceAll("-->", "--\\u003e");
 
 const cue = (id: string, startMs: number, endMs: number, value: unknown): string =>
@@ -39,7 +40,7 @@ export function writeMarkingTrack(steps: readonly Step[], questions: readonly Qu
  */
 export function readMarkingTrack(text: string, durationMs: number): { cues: MarkingCue[] } | { problems: LineProblem[] } {
   const { cues, problems } = readVtt(text);
-  const found = [...problems];
+  const found = [...problems, ...repeatedIds(cues)];
   const read: MarkingCue[] = [];
   for (const { line, id, startMs, endMs, text: body } of cues) {
     if (startMs > durationMs) found.push({ line, message: `This begins after the end of the film (${formatTimestamp(durationMs)}).` });
@@ -49,5 +50,5 @@ export function readMarkingTrack(text: string, durationMs: number): { cues: Mark
       found.push({ line: line + 1, message: "The text under this time is not JSON." });
     }
   }
-  return found.length > 0 ? { problems: found.toSorted((a, b) => a.line - b.line) } : { cues: read };
+  return found.length > 0 ? { problems: inFileOrder(found) } : { cues: read };
 }

@@ -18,7 +18,7 @@ export async function installPackages(root, logFolder) {
   mkdirSync(logFolder, { recursive: true });
   const log = join(logFolder, "npm.log");
   const file = openSync(log, "w");
-  const { code } = await run("npm", ["ci", "--include=dev", "--no-audit", "--no-fund"], { cwd: root, log: file });
+  const { code } = await run("npm", ["ci", "--include=dev", "--no-audit", "--no-fund", "--no-update-notifier"], { cwd: root, log: file });
   closeSync(file);
   if (code !== 0) throw new Told(`npm could not install the packages; is the network there? The last lines of ${log}:\n${lastLines(log)}`);
   return "installed";

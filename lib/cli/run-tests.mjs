@@ -11,7 +11,7 @@ import { choosePorts } from "./ports.mjs";
 import { readSecrets } from "./secrets.mjs";
 import { secondsSince, stage } from "./stages.mjs";
 import { supervise } from "./supervise.mjs";
-import { runCommand, Told } from "./told.mjs";
+import { describeFailure, runCommand, Told } from "./told.mjs";
 
 // `npm test`: every check on servers of its own. `npm test -- types lint` runs some of them only.
 const root = resolve(dirname(fileURLToPath(import.meta.url)), "../..");
@@ -25,7 +25,7 @@ const total = { passed: 0, failed: 0, skipped: 0 };
 await runCommand(async () => {
   const began = performance.now();
   const code = await supervise(dataFolder, testAll).catch((error) => {
-    console.error(error instanceof Told ? `\n${error.message}` : error);
+    console.error(describeFailure(error));
     total.failed += 1;
     return 1;
   });

@@ -16,7 +16,7 @@ const FOLDER = "shots";
 async function main(): Promise<void> {
   const base = process.argv[2] ?? "http://127.0.0.1:4200";
   const only = process.argv[3];
-  rmSync(FOLDER, { recursive: true, force: true });
+  if (!only) rmSync(FOLDER, { recursive: true, force: true });
   mkdirSync(FOLDER, { recursive: true });
   const browser = await chromium.launch({ executablePath: "/usr/bin/chromium", args: ["--no-sandbox", "--disable-gpu", "--disable-background-networking"] });
   let faults = 0;

@@ -10,7 +10,23 @@ export async function runCommand(main) {
   try {
     code = (await main()) ?? 0;
   } catch (error) {
-    console.error(error instanceof Told ? `\n${error.message}` : error);
+    console.error(describeFailure(error));
   }
   process.exit(code); // work that was given up may still be waiting for something
+}
+
+const REFUSALS = {
+  ENOSPC: "The disk is full. Make room and start again.",
+  EROFS: "This disk can only be read. Put the clone where this account can write.",
+  EACCES: "This account may not write there. Start as the person to whom the clone belongs.",
+};
+
+/**
+ * What to print of a failure: a sentence where there is one, and all of it where it is our own bug.
+ * @param {any} error
+ */
+export function describeFailure(error) {
+  if (error instanceof Told) return `\n${error.message}`;
+  const refusal = REFUSALS[error?.code];
+  return refusal ? `\n${error.message}\n${refusal}` : error;
 }

@@ -12,6 +12,7 @@ import { arePackagesInstalled } from "@/lib/cli/packages.mjs";
 import { findPostgres } from "@/lib/cli/programs.mjs";
 import { readSecrets } from "@/lib/cli/secrets.mjs";
 import { stage } from "@/lib/cli/stages.mjs";
+import { describeFailure, Told } from "@/lib/cli/told.mjs";
 
 const folder = () => mkdtempSync(join(tmpdir(), "stages-"));
 afterEach(() => vi.unstubAllEnvs());
@@ -116,4 +117,12 @@ test("words and ports from the command line are checked", () => {
   expect(readWishedPort(undefined)).toBeUndefined();
   expect(readWishedPort("8080")).toBe(8080);
   expect(() => readWishedPort("eighty")).toThrow("it must be a number from 1 to 65535");
+});
+
+test("a refusal of the system is told with what to do; a bug of ours keeps its stack", () => {
+  const full = Object.assign(new Error("ENOSPC: no space left on device, write"), { code: "ENOSPC" });
+  expect(describeFailure(full)).toBe("\nENOSPC: no space left on device, write\nThe disk is full. Make room and start again.");
+  expect(describeFailure(new Told("Port 4200 is taken."))).toBe("\nPort 4200 is taken.");
+  const bug = new TypeError("undefined is not a function");
+  expect(describeFailure(bug)).toBe(bug);
 });

@@ -14,3 +14,9 @@ export function convert(value: number, from: string, to: string): number {
   if (source.symbol === target.symbol) return value;
   return (value * source.factor + source.offset - target.offset) / target.factor;
 }
+
+/** Whether two units are known and measure the same thing, so that one can be turned into the other. */
+export function sameQuantity(a: string, b: string): boolean {
+  const quantity = findUnit(a)?.quantity;
+  return quantity !== undefined && quantity === findUnit(b)?.quantity;
+}

@@ -6,9 +6,17 @@ function decimalsOf(resolution: number): number {
   return resolution >= 1 ? 0 : Math.min(6, Math.ceil(-Math.log10(resolution) - 1e-9));
 }
 
-/** A value with its unit as it is shown, for example "25 N·m". @param resolution smallest step worth showing, in the same unit */
+/** Rounds half away from zero as people do on paper; a binary fraction that falls short of the half (1.005) counts as the half. */
+function rounded(value: number, decimals: number): string {
+  const scaled = Math.round(Number((Math.abs(value) * 10 ** decimals).toPrecision(14)));
+  return `${value < 0 && scaled !== 0 ? "-" : ""}${(scaled / 10 ** decimals).toFixed(decimals)}`;
+}
+
+/**
+ * A value with its unit as it is shown, for example "25 N·m". For display only: what is stored is never rounded.
+ * @param resolution  smallest step worth showing, in the same unit; a whole number is shown without decimals
+ */
 export function formatValue(value: number, unit: string, resolution = 0.01): string {
-  const rounded = value.toFixed(decimalsOf(resolution));
-  const text = resolution < 1 && !Number.isInteger(value) ? rounded : String(Number(rounded));
-  return unit === "°" || unit === "%" ? `${text}${unit === "%" ? NARROW_SPACE : ""}${unit}` : `${text}${NARROW_SPACE}${unit}`;
+  const text = rounded(value, Number.isInteger(value) ? 0 : decimalsOf(resolution));
+  return unit === "°" ? `${text}${unit}` : `${text}${NARROW_SPACE}${unit}`;
 }

@@ -18,6 +18,7 @@ const STALLED_AFTER_MS = 45_000;
 /** By XMLHttpRequest, since fetch does not tell how many bytes have gone. */
 export const putPart: PutPart = (url, body, onSent, signal) =>
   new Promise((resolve, reject) => {
+    signal.throwIfAborted();
     const request = new XMLHttpRequest();
     let timer = setTimeout(() => request.abort(), STALLED_AFTER_MS);
     const stop = () => request.abort();

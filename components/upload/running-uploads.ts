@@ -53,12 +53,19 @@ async function run(key: string, org: string, file: File): Promise<void> {
   const stop = stops.get(key);
   if (!stop || stop.signal.aborted) return;
   const awake = await stayAwake();
+  let uploadId: string | null = null;
   try {
-    const onState = throttle((state: SendingState) => update(key, { state }));
+    const tell = throttle((state: SendingState) => update(key, { state }));
+    const onState = (state: SendingState) => {
+      uploadId = state.uploadId;
+      tell(state);
+    };
     const { recordingId } = await sendFile(file, { org, purpose: "recording", signal: stop.signal, onState });
     if (recordingId) update(key, { outcome: { recordingId } });
   } catch (error) {
-    if (!stop.signal.aborted) update(key, { problem: error instanceof Error ? error.message : "The file could not be sent." });
+    // What can't be thrown away now is shown as unfinished and can be given up there.
+    if (stop.signal.aborted && uploadId) await uploadDoors(org).cancel(uploadId).catch(() => {});
+    else update(key, { problem: error instanceof Error ? error.message : "The file could not be sent." });
   } finally {
     awake?.();
     stops.delete(key);
@@ -66,12 +73,9 @@ async function run(key: string, org: string, file: File): Promise<void> {
 }
 
 /** Gives an upload up: nothing of it stays, here or in the store. */
-export async function cancelUpload(key: string): Promise<void> {
-  const upload = uploads.find((each) => each.key === key);
+export function cancelUpload(key: string): void {
   stops.get(key)?.abort(new Error("Given up."));
   dismissUpload(key);
-  // Not in the store's way: what can't be thrown away now is shown as unfinished and can be given up there.
-  if (upload?.state?.uploadId) await uploadDoors(upload.org).cancel(upload.state.uploadId).catch(() => {});
 }
 
 export function dismissUpload(key: string): void {

@@ -39,7 +39,7 @@ export function UploadLine({ upload }: { upload: RunningUpload }) {
       <div className="min-w-0 flex-1 basis-60">
         <Progress label={file.name} percent={percent} detail={wordsOf(upload)} />
       </div>
-      <Press label="Give up" about={file.name} onClick={() => void cancelUpload(key)} />
+      <Press label="Give up" about={file.name} onClick={() => cancelUpload(key)} />
     </Line>
   );
 }

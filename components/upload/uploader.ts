@@ -106,12 +106,16 @@ class Sending {
     const { name: fileName, type: mediaType, size: sizeBytes, lastModified } = this.#file;
     const input = { purpose: this.#options.purpose, fileName, mediaType, sizeBytes, modifiedMs: Math.floor(lastModified) };
     this.#upload = await this.#ask(() => this.#doors.start(input));
+    // Told before anything else: whoever gave up meanwhile must learn what there is to throw away.
+    this.tell();
+    this.#signal.throwIfAborted();
     return this.#upload;
   }
 
   async send(): Promise<CompletedUpload> {
     for (let attempt = 1; ; attempt += 1) {
       const upload = await this.#ask(() => this.#doors.status(this.#started().uploadId));
+      this.#signal.throwIfAborted();
       if (upload.state === "open") await this.#sendMissing(upload);
       this.tell("checking");
       try {

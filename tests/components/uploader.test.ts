@@ -138,6 +138,20 @@ test("stopped, it stops at once and sends nothing more", async () => {
   expect(arrived).toBeLessThan(8);
 });
 
+test("given up before the server has answered, it is told what there is to throw away, and sends nothing", async () => {
+  const controller = new AbortController();
+  const place = somePlace(1000);
+  const start = place.doors.start;
+  place.doors.start = async (input) => {
+    controller.abort(new Error("stopped"));
+    return start(input);
+  };
+  let last: SendingState | undefined;
+  await expect(sendFile(fileOf(1000), { ...options(place, (state) => (last = state)), signal: controller.signal })).rejects.toThrow("stopped");
+  expect(last?.uploadId).toBe("u1");
+  expect(place.parts.size).toBe(0);
+});
+
 test("a refusal of the server is passed on as it is said", async () => {
   const place = somePlace(1000);
   place.doors.start = async () => {

@@ -1,6 +1,6 @@
 import { spawn } from "node:child_process";
 import { readdir, readFile } from "node:fs/promises";
-import { expect, test } from "vitest";
+import { expect, test, vi } from "vitest";
 import { claimNextStage, failStage, finishStage, lockRecording, renewLease } from "@/db/queries/recording-stages";
 import { processRecording, takeUpForsaken } from "@/lib/jobs/process-recording";
 import { viewRecording } from "@/lib/services/recordings/view-recording";
@@ -9,6 +9,9 @@ import { testDatabase } from "../support/database";
 import { createMember, createOrganisation } from "../support/factories";
 import { testStore } from "../support/store";
 import { bringIn } from "../support/uploads";
+
+// A converter and a second process at work: give a busy machine time.
+vi.setConfig({ testTimeout: 90_000 });
 
 const { db } = testDatabase();
 const store = testStore();
@@ -64,7 +67,7 @@ test("while its holder lives a stage is left alone; after its lease another take
 test("a worker killed in the middle of a film is followed by another, and its converter dies with it", async () => {
   const { recordingId, see } = await someRecording(await clips.film("longer.mp4", { size: "1280x720", seconds: 25, args: ["-g", "250"] }));
   const worker = spawn(process.execPath, ["--import", "tsx", "tests/support/process-recording.ts", recordingId], { stdio: "ignore" });
-  await expect.poll(async () => (await see()).stages[1]?.percent, { timeout: 15_000, interval: 50 }).toBeGreaterThan(0);
+  await expect.poll(async () => (await see()).stages[1]?.percent, { timeout: 45_000, interval: 50 }).toBeGreaterThan(0);
   worker.kill("SIGKILL");
   await new Promise((resolve) => worker.once("close", resolve));
   expect(await see()).toMatchObject({ state: "processing", stages: [{ state: "done" }, { state: "running" }, {}, {}, {}] });

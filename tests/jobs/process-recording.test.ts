@@ -1,7 +1,7 @@
 import { readFile } from "node:fs/promises";
 import { readdirSync } from "node:fs";
 import { tmpdir } from "node:os";
-import { expect, test } from "vitest";
+import { expect, test, vi } from "vitest";
 import type { Actor } from "@/lib/core/roles";
 import { readVtt } from "@/lib/core/webvtt/read-vtt";
 import { processRecording } from "@/lib/jobs/process-recording";
@@ -16,6 +16,9 @@ import { testDatabase } from "../support/database";
 import { createMember, createOrganisation } from "../support/factories";
 import { testStore } from "../support/store";
 import { bringIn } from "../support/uploads";
+
+// Real films are converted: give a busy machine time.
+vi.setConfig({ testTimeout: 90_000 });
 
 const { db } = testDatabase();
 testStore();

@@ -1,7 +1,9 @@
 import { spawn } from "node:child_process";
 import { readdir, readFile } from "node:fs/promises";
+import { tmpdir } from "node:os";
 import { expect, test, vi } from "vitest";
 import { claimNextStage, failStage, finishStage, lockRecording, renewLease } from "@/db/queries/recording-stages";
+import { openWorkspace } from "@/lib/jobs/media/workspace";
 import { processRecording, takeUpForsaken } from "@/lib/jobs/process-recording";
 import { viewRecording } from "@/lib/services/recordings/view-recording";
 import { testClips } from "../support/clips";
@@ -77,6 +79,14 @@ test("a worker killed in the middle of a film is followed by another, and its co
   expect(await takeUpForsaken()).toEqual([recordingId]);
   const next = await claim(recordingId);
   expect(next).toMatchObject({ stage: "480p", attempt: 2 });
+  // What the dead worker left on the disk goes when the next one begins.
+  const foldersOf = async () => (await readdir(tmpdir())).filter((name) => name.includes(recordingId));
+  expect(await foldersOf()).toHaveLength(1);
+  const [left] = await foldersOf();
+  const workspace = await openWorkspace(recordingId);
+  expect(await foldersOf()).not.toContain(left);
+  await workspace.remove();
+  expect(await foldersOf()).toEqual([]);
 });
 
 test("a stage over which workers keep dying waits for a person", async () => {

@@ -17,6 +17,7 @@ import { settingsFor } from "./settings.mjs";
 const DIST_DIR = ".data/test/next";
 
 const tool = (path) => join("node_modules", path);
+const TYPEGEN = [tool("next/dist/bin/next"), "typegen"];
 
 export const CHECKS = {
   types: { title: "Types", work: checkTypes },
@@ -28,7 +29,7 @@ export const CHECKS = {
 
 /** The framework writes the types of the addresses first; our own types lean on them. */
 function checkTypes(ground) {
-  return checkByExitCode(ground, "types", [[tool("next/dist/bin/next"), "typegen"], [tool("typescript/bin/tsc"), "--noEmit", "-p", "."]]);
+  return checkByExitCode(ground, "types", [TYPEGEN, [tool("typescript/bin/tsc"), "--noEmit", "-p", "."]]);
 }
 
 function checkImports(ground) {
@@ -63,6 +64,7 @@ async function checkInBrowser(ground) {
   await migrateDatabase(installation);
   await loadDemo(installation);
   await buildApplication({ root, dataFolder, logFolder, distDir: DIST_DIR, env });
+  await runLogged(ground, "typegen", TYPEGEN, process.env); // the build made next-env.d.ts point at its own folder
   await launchApplication(installation);
 
   const path = join(dataFolder, "browser.json");

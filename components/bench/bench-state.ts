@@ -3,9 +3,12 @@ import { NO_FACTS, type Step } from "@/lib/core/steps/types";
 
 /** What is being marked out. Steps stand in the order of the film and never overlap; whatever is done keeps it so. */
 export type Draft = { steps: Step[]; questions: Question[] };
-export type BenchState = { draft: Draft; undo: Draft[]; redo: Draft[] };
+/** `strand` names the go that the last act belonged to: a drag, a visit to a field. Acts of one go are undone together. */
+export type BenchState = { draft: Draft; undo: Draft[]; redo: Draft[]; strand: string | null };
 
-export type BenchAct =
+export type BenchAct = { strand?: string } & Act;
+
+type Act =
   | { do: "split"; atMs: number; newId: string }
   | { do: "add"; atMs: number; newId: string; durationMs: number }
   | { do: "join"; stepId: string }
@@ -21,30 +24,36 @@ export type BenchAct =
 
 /** Shorter than this nothing can be seen. */
 const SHORTEST_MS = 200;
+/** Undoing goes back this far. */
+const MOST_UNDO = 300;
+/** What a step is called until it has a name: it is kept all the same. */
+export const NAMELESS = "Not named yet";
 /** A new step is as long as this where there is room. */
 const FIRST_LENGTH_MS = 10_000;
 
-export const beginBench = (draft: Draft): BenchState => ({ draft, undo: [], redo: [] });
+export const beginBench = (draft: Draft): BenchState => ({ draft, undo: [], redo: [], strand: null });
 
 /** One act on the bench. An act that can't be done changes nothing, and then there is nothing to undo. */
 export function bench(state: BenchState, act: BenchAct): BenchState {
   if (act.do === "undo") {
     const before = state.undo.at(-1);
-    return before ? { draft: before, undo: state.undo.slice(0, -1), redo: [...state.redo, state.draft] } : state;
+    return before ? { draft: before, undo: state.undo.slice(0, -1), redo: [...state.redo, state.draft], strand: null } : state;
   }
   if (act.do === "redo") {
     const after = state.redo.at(-1);
-    return after ? { draft: after, undo: [...state.undo, state.draft], redo: state.redo.slice(0, -1) } : state;
+    return after ? { draft: after, undo: [...state.undo, state.draft], redo: state.redo.slice(0, -1), strand: null } : state;
   }
   if (act.do === "load") return beginBench(act.draft);
   const draft = change(state.draft, act);
-  return draft === state.draft ? state : { draft, undo: [...state.undo, state.draft], redo: [] };
+  if (draft === state.draft) return state;
+  const goesOn = act.strand !== undefined && act.strand === state.strand;
+  return { draft, undo: goesOn ? state.undo : [...state.undo, state.draft].slice(-MOST_UNDO), redo: [], strand: act.strand ?? null };
 }
 
 /** The step that a moment lies in. */
 export const stepAt = (steps: readonly Step[], atMs: number): Step | undefined => steps.find((step) => atMs >= step.startMs && atMs < step.endMs);
 
-type Edit = Exclude<BenchAct, { do: "undo" | "redo" | "load" }>;
+type Edit = Exclude<Act, { do: "undo" | "redo" | "load" }>;
 
 function change(draft: Draft, act: Edit): Draft {
   switch (act.do) {
@@ -55,6 +64,7 @@ function change(draft: Draft, act: Edit): Draft {
     case "join":
       return join(draft, act.stepId);
     case "remove_step":
+      if (!draft.steps.some((step) => step.id === act.stepId)) return draft;
       return { steps: draft.steps.filter((step) => step.id !== act.stepId), questions: draft.questions.filter((question) => question.stepId !== act.stepId) };
     case "set_start":
     case "set_end":
@@ -74,7 +84,7 @@ function change(draft: Draft, act: Edit): Draft {
 function split(draft: Draft, atMs: number, newId: string): Draft {
   const step = stepAt(draft.steps, atMs);
   if (!step || atMs - step.startMs < SHORTEST_MS || step.endMs - atMs < SHORTEST_MS) return draft;
-  const second: Step = { id: newId, title: "", startMs: atMs, endMs: step.endMs, facts: NO_FACTS };
+  const second: Step = { id: newId, title: NAMELESS, startMs: atMs, endMs: step.endMs, facts: NO_FACTS };
   return {
     steps: draft.steps.flatMap((other) => (other.id === step.id ? [{ ...step, endMs: atMs }, second] : [other])),
     questions: draft.questions.map((question) => (question.stepId === step.id && question.atMs > atMs ? { ...question, stepId: newId } : question)),
@@ -87,7 +97,7 @@ function add(draft: Draft, { atMs, newId, durationMs }: Extract<Edit, { do: "add
   const next = draft.steps.find((step) => step.startMs >= atMs);
   const endMs = Math.min(atMs + FIRST_LENGTH_MS, next?.startMs ?? durationMs, durationMs);
   if (endMs - atMs < SHORTEST_MS) return draft;
-  const step: Step = { id: newId, title: "", startMs: atMs, endMs, facts: NO_FACTS };
+  const step: Step = { id: newId, title: NAMELESS, startMs: atMs, endMs, facts: NO_FACTS };
   return { ...draft, steps: [...draft.steps, step].toSorted((a, b) => a.startMs - b.startMs) };
 }
 
@@ -104,7 +114,7 @@ function join(draft: Draft, stepId: string): Draft {
     cautions: [...step.facts.cautions, ...next.facts.cautions],
     faultCodes: [...new Set([...step.facts.faultCodes, ...next.facts.faultCodes])],
   };
-  const joined: Step = { ...step, title: step.title || next.title, endMs: next.endMs, facts };
+  const joined: Step = { ...step, title: step.title === NAMELESS ? next.title : step.title, endMs: next.endMs, facts };
   return {
     steps: draft.steps.flatMap((other) => (other.id === step.id ? [joined] : other.id === next.id ? [] : [other])),
     questions: draft.questions.map((question) => (question.stepId === next.id ? { ...question, stepId: step.id } : question)),

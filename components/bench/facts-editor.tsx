@@ -1,6 +1,7 @@
 "use client";
 
 import { ListEditor } from "@/components/bench/list-editor";
+import { NumberField } from "@/components/bench/number-field";
 import { Button } from "@/components/ui/button";
 import { Checkbox, SelectField, TextField } from "@/components/ui/field";
 import { Value } from "@/components/ui/tag";
@@ -20,7 +21,7 @@ export function FactsEditor({ facts, onChange }: FactsEditorProps) {
   return (
     <div className="grid gap-4">
       <section className="grid gap-3">
-        <h3 className="text-[1.15rem]">Cautions</h3>
+        <h3 className="text-[1.15rem]">Cautions, shown before the step</h3>
         {facts.cautions.map((caution) => (
           <CautionEditor
             key={caution.id}
@@ -45,21 +46,32 @@ export function FactsEditor({ facts, onChange }: FactsEditorProps) {
       </section>
       <ListEditor label="Tools" items={facts.tools} onChange={(tools) => patch({ tools })} />
       <ListEditor label="Parts" items={facts.parts} onChange={(parts) => patch({ parts })} />
+      <FluidsEditor fluids={facts.fluids} onChange={(fluids) => patch({ fluids })} />
       <ListEditor
-        label="Fluids"
-        items={facts.fluids.map((fluid) => (fluid.amount ? `${fluid.kind}: ${fluid.amount}` : fluid.kind))}
-        hint="Like coolant: 6.2 L, parted by commas"
-        onChange={(items) =>
-          patch({
-            fluids: items.map((item) => {
-              const [kind = "", amount = ""] = item.split(":").map((part) => part.trim());
-              return { kind, amount };
-            }),
-          })
-        }
-      />
-      <ListEditor label="Fault codes" items={facts.faultCodes} hint="Like P0301, parted by commas" onChange={(codes) => patch({ faultCodes: codes.map((code) => code.toUpperCase()) })} />
+        label="Fault codes" items={facts.faultCodes} hint="Like P0301, one on each line" onChange={(codes) => patch({ faultCodes: codes.map((code) => code.toUpperCase()) })} />
     </div>
+  );
+}
+
+type Fluid = StepFacts["fluids"][number];
+
+function FluidsEditor({ fluids, onChange }: { fluids: Fluid[]; onChange: (fluids: Fluid[]) => void }) {
+  const change = (at: number, patch: Partial<Fluid>) => onChange(fluids.map((fluid, index) => (index === at ? { ...fluid, ...patch } : fluid)));
+  return (
+    <section className="grid gap-3">
+      <h3 className="text-[1.15rem]">Fluids</h3>
+      {fluids.map((fluid, index) => (
+        // Fluids have no id of their own: their place is what they are.
+        <div key={index} className="grid grid-cols-[1fr_7rem_auto] items-end gap-2">
+          <TextField label="Fluid" value={fluid.kind} maxLength={120} onChange={(event) => change(index, { kind: event.target.value })} />
+          <TextField label="Amount" value={fluid.amount} maxLength={60} onChange={(event) => change(index, { amount: event.target.value })} />
+          <Button aria-label={`Remove fluid ${index + 1}`} onClick={() => onChange(fluids.filter((_, other) => other !== index))}>
+            ×
+          </Button>
+        </div>
+      ))}
+      <Button onClick={() => onChange([...fluids, { kind: "", amount: "" }])}>Add a fluid</Button>
+    </section>
   );
 }
 
@@ -67,7 +79,7 @@ type CautionEditorProps = { caution: Caution; onChange: (caution: Caution) => vo
 
 function CautionEditor({ caution, onChange, onRemove }: CautionEditorProps) {
   return (
-    <div className="grid gap-2 rounded border border-rule border-l-[6px] border-l-caution p-3">
+    <div className="grid gap-2 rounded border border-rule border-l-[6px] border-l-caution bg-chalk p-3">
       <div className="grid grid-cols-2 gap-2">
         <SelectField label="Grade" value={caution.grade} onChange={(event) => onChange({ ...caution, grade: event.target.value as CautionGrade })}>
           {CAUTION_GRADES.map((grade) => (
@@ -84,6 +96,13 @@ function CautionEditor({ caution, onChange, onRemove }: CautionEditorProps) {
       </div>
       <TextField label="What can hurt" value={caution.hazard} maxLength={200} onChange={(event) => onChange({ ...caution, hazard: event.target.value })} />
       <TextField label="What to do, and how it shows" value={caution.instruction} maxLength={400} onChange={(event) => onChange({ ...caution, instruction: event.target.value })} />
+      <NumberField
+        label="Wait before going on, seconds"
+        min={1}
+        value={caution.waitSeconds}
+        onChange={(seconds) => onChange({ ...caution, waitSeconds: seconds === null ? null : Math.min(Math.round(seconds), 86_400) })}
+        hint="Like the time that a system takes to lose its charge. Empty: no waiting."
+      />
       <Button kind="quiet" onClick={onRemove}>
         Remove this caution
       </Button>
@@ -103,25 +122,18 @@ function FastenerEditor({ fastener, onChange, onRemove }: FastenerEditorProps) {
     onChange({ ...fastener, tightening: { entered, source: tightening?.source ?? DEFAULT_SOURCE, ...numbers } });
   };
   return (
-    <div className="grid gap-2 rounded border border-rule p-3">
+    <div className="grid gap-2 rounded border border-rule bg-chalk p-3">
       <TextField label="Fastener" value={fastener.name} maxLength={120} onChange={(event) => onChange({ ...fastener, name: event.target.value })} />
       <div className="grid grid-cols-2 gap-2">
-        <TextField label="How many" type="number" min={1} max={200} value={fastener.count} onChange={(event) => onChange({ ...fastener, count: Math.max(1, Number(event.target.value)) })} />
-        <TextField
-          label="Across flats, mm"
-          inputMode="decimal"
-          type="number"
-          step="0.5"
-          value={fastener.acrossFlatsMm ?? ""}
-          onChange={(event) => onChange({ ...fastener, acrossFlatsMm: event.target.value === "" ? null : Number(event.target.value) })}
-        />
+        <NumberField label="How many" min={1} value={fastener.count} onChange={(count) => onChange({ ...fastener, count: Math.min(Math.round(count ?? 1), 200) })} />
+        <NumberField label="Across flats, mm" value={fastener.acrossFlatsMm} onChange={(acrossFlatsMm) => onChange({ ...fastener, acrossFlatsMm })} />
       </div>
       <TextField
         label="Tightening value"
         value={tightening?.entered ?? ""}
         maxLength={80}
         onChange={(event) => enter(event.target.value)}
-        hint={parsed && !("problem" in parsed) ? <Value>{formatTightening(parsed)}</Value> : "Like 25 Nm, 18 lbf ft, 50 Nm + 90°"}
+        hint={parsed && !("problem" in parsed) ? <span className="text-base text-ink">Understood as <Value className="font-semibold">{formatTightening(parsed)}</Value></span> : "Like 25 Nm, 18 lbf ft, 50 Nm + 90°"}
         error={parsed && "problem" in parsed ? parsed.problem : undefined}
       />
       {tightening && (

@@ -1,27 +1,30 @@
 /** Every act of the bench by its key, in the order of the sheet. */
 export const BENCH_KEYS = [
-  { key: "Space", also: "k", words: "play or pause" },
-  { key: "J", also: null, words: "back five seconds" },
-  { key: "L", also: null, words: "on five seconds" },
-  { key: "←", also: "ArrowLeft", words: "back a second" },
-  { key: "→", also: "ArrowRight", words: "on a second" },
-  { key: ",", also: null, words: "back a picture" },
-  { key: ".", also: null, words: "on a picture" },
-  { key: "[", also: null, words: "step before" },
-  { key: "]", also: null, words: "step after" },
-  { key: "N", also: null, words: "new step from here" },
-  { key: "S", also: null, words: "split the step here" },
-  { key: "I", also: null, words: "step begins here" },
-  { key: "O", also: null, words: "step ends here" },
-  { key: "M", also: null, words: "join with the next step" },
-  { key: "Q", also: null, words: "question here" },
-  { key: "Delete", also: null, words: "remove what is chosen" },
-  { key: "Ctrl Z", also: null, words: "undo" },
-  { key: "Ctrl Shift Z", also: null, words: "redo" },
-  { key: "?", also: null, words: "this sheet" },
+  { about: "The film", keys: ["Space", "K"], words: "play or pause" },
+  { about: "The film", keys: ["J"], words: "back five seconds; held: backwards fast" },
+  { about: "The film", keys: ["L"], words: "on five seconds; held: forwards fast, then faster" },
+  { about: "The film", keys: ["←", "→"], words: "a second back, a second on" },
+  { about: "The film", keys: [",", "."], words: "a picture back, a picture on" },
+  { about: "The film", keys: ["Home", "End"], words: "to the beginning, to the end" },
+  { about: "Steps", keys: ["[", "]"], words: "the step before, the step after" },
+  { about: "Steps", keys: ["N"], words: "new step from here" },
+  { about: "Steps", keys: ["S"], words: "split the step here" },
+  { about: "Steps", keys: ["I"], words: "the step begins here" },
+  { about: "Steps", keys: ["O"], words: "the step ends here" },
+  { about: "Steps", keys: ["M"], words: "join with the next step" },
+  { about: "Steps", keys: ["Tab", "←", "→"], words: "on an edge: move it by a picture; with Shift by a second" },
+  { about: "Questions", keys: ["Q"], words: "question here" },
+  { about: "All", keys: ["Delete"], words: "remove the step or question that is chosen" },
+  { about: "All", keys: ["Ctrl Z"], words: "undo; with Shift redo" },
+  { about: "All", keys: ["?"], words: "this sheet" },
 ] as const;
 
-/** Keys must not act while somebody types or works a control that has the same key. */
+const TYPED_INTO = new Set(["text", "number", "search", "url", "email", "tel", "date", "time", "file"]);
+
+/** Keys must not act while somebody types, chooses from a list, or looks at a sheet that lies on top. */
 export function isTyping(target: EventTarget | null): boolean {
-  return target instanceof HTMLElement && (target.isContentEditable || /^(INPUT|TEXTAREA|SELECT|DIALOG)$/.test(target.tagName) || target.closest("dialog") !== null);
+  if (!(target instanceof HTMLElement)) return false;
+  if (target.isContentEditable || target.closest("dialog") !== null) return true;
+  if (target instanceof HTMLInputElement) return TYPED_INTO.has(target.type);
+  return target instanceof HTMLTextAreaElement || target instanceof HTMLSelectElement;
 }

@@ -1,25 +1,31 @@
 "use client";
 
 import { useState } from "react";
-import { TextField } from "@/components/ui/field";
+import { TextArea } from "@/components/ui/field";
 
 type ListEditorProps = { label: string; items: string[]; hint?: string; onChange: (items: string[]) => void };
 
-/** Short things, one a line of text, parted by commas: tools, parts, codes. Kept when the field is left. */
-export function ListEditor({ label, items, hint = "Parted by commas", onChange }: ListEditorProps) {
-  const [text, setText] = useState(items.join(", "));
+const itemsOf = (text: string): string[] =>
+  text
+    .split("\n")
+    .map((item) => item.trim())
+    .filter(Boolean);
+
+/** Short things, one on each line: tools, parts, codes. */
+export function ListEditor({ label, items, hint, onChange }: ListEditorProps) {
+  const [text, setText] = useState(items.join("\n"));
+  // Undone, joined or loaded anew: what is typed follows.
+  const joined = items.join("\n");
+  if (itemsOf(text).join("\n") !== joined && text !== joined) setText(joined);
   return (
-    <TextField
+    <TextArea
       label={label}
-      hint={hint}
+      hint={hint ?? "One on each line"}
+      rows={Math.max(2, items.length + 1)}
       value={text}
-      onChange={(event) => setText(event.target.value)}
-      onBlur={() => {
-        const next = text
-          .split(",")
-          .map((item) => item.trim())
-          .filter(Boolean);
-        if (next.join("\n") !== items.join("\n")) onChange(next);
+      onChange={(event) => {
+        setText(event.target.value);
+        onChange(itemsOf(event.target.value));
       }}
     />
   );

@@ -1,16 +1,19 @@
 "use client";
 
+import { NumberField } from "@/components/bench/number-field";
+import { OrderEditor } from "@/components/bench/order-editor";
+import { shortTime, TimeField } from "@/components/bench/time-field";
 import { Button } from "@/components/ui/button";
 import { Checkbox, SelectField, TextArea, TextField } from "@/components/ui/field";
+import { Segmented } from "@/components/ui/segmented";
+import { KeyCap } from "@/components/ui/tag";
 import { questionProblems } from "@/lib/core/questions/question-problems";
-import type { NumberBody, OneOfBody, PutInOrderBody, Question, QuestionBody, QuestionKind } from "@/lib/core/questions/types";
+import type { NumberBody, OneOfBody, Question, QuestionBody, QuestionKind } from "@/lib/core/questions/types";
 import type { Step } from "@/lib/core/steps/types";
 import { UNITS } from "@/lib/core/units/units";
-import { formatClock } from "@/lib/core/webvtt/timestamps";
 
 type QuestionEditorProps = {
   question: Question;
-  number: number;
   step: Step | undefined;
   steps: Step[];
   atMs: number;
@@ -18,47 +21,46 @@ type QuestionEditorProps = {
   onRemove: () => void;
 };
 
-const KINDS: Record<QuestionKind, string> = { one_of: "one of", number: "number with unit", put_in_order: "put in order" };
+const KINDS: { value: QuestionKind; label: string }[] = [
+  { value: "one_of", label: "One of" },
+  { value: "number", label: "Number" },
+  { value: "put_in_order", label: "Put in order" },
+];
 
 /** An empty body of each kind. */
 export function emptyBody(kind: QuestionKind): QuestionBody {
   const choice = (right: boolean) => ({ id: crypto.randomUUID(), text: "", right, why: "" });
   if (kind === "one_of") return { kind, choices: [choice(true), choice(false)] };
-  if (kind === "number") return { kind, unit: "mm", value: 0, tolerance: 0, slips: [] };
+  if (kind === "number") return { kind, unit: "mm", value: NaN, tolerance: 0, slips: [] };
   return { kind, items: [{ id: crypto.randomUUID(), text: "" }, { id: crypto.randomUUID(), text: "" }], neverBefore: [] };
 }
 
 /** One step question of any kind. */
-export function QuestionEditor({ question, number, step, steps, atMs, onChange, onRemove }: QuestionEditorProps) {
+export function QuestionEditor({ question, step, steps, atMs, onChange, onRemove }: QuestionEditorProps) {
   const patch = (change: Partial<Question>) => onChange({ ...question, ...change });
   const problems = questionProblems(question, step);
+  const inside = (ms: number): number => (step ? Math.min(Math.max(ms, step.startMs), step.endMs) : ms);
   return (
     <div className="grid gap-3">
-      <h2 className="text-[1.4rem] leading-tight">
-        Question {number} at {formatClock(question.atMs)}
-      </h2>
-      <SelectField label="Kind" value={question.body.kind} onChange={(event) => patch({ body: emptyBody(event.target.value as QuestionKind) })}>
-        {Object.entries(KINDS).map(([kind, words]) => (
-          <option key={kind} value={kind}>
-            {words}
-          </option>
-        ))}
-      </SelectField>
+      <Segmented legend="Kind of question" name={`kind-${question.id}`} value={question.body.kind} choices={KINDS} onChange={(kind) => patch({ body: emptyBody(kind) })} />
       <TextArea label="Question" rows={2} value={question.prompt} maxLength={500} onChange={(event) => patch({ prompt: event.target.value })} />
       {question.body.kind === "one_of" && <OneOfEditor body={question.body} onChange={(body) => patch({ body })} />}
       {question.body.kind === "number" && <NumberEditor body={question.body} onChange={(body) => patch({ body })} />}
       {question.body.kind === "put_in_order" && <OrderEditor body={question.body} steps={steps} onChange={(body) => patch({ body })} />}
       <TextArea label="Why it is right" rows={2} value={question.explanation} maxLength={1000} onChange={(event) => patch({ explanation: event.target.value })} hint="Shown once the answer was right" />
       <Checkbox label="Safety-critical: must always be right" checked={question.safetyCritical} onChange={(event) => patch({ safetyCritical: event.target.checked })} />
-      <div className="flex flex-wrap gap-2">
-        <Button onClick={() => patch({ lookAgainMs: atMs })}>Look again at {formatClock(question.lookAgainMs)}: set to here</Button>
-        <Button onClick={() => step && patch({ atMs: Math.min(Math.max(atMs, step.startMs), step.endMs) })}>Ask it here</Button>
-        <Button kind="quiet" onClick={onRemove}>
-          Remove this question
-        </Button>
+      <div className="grid grid-cols-2 items-end gap-x-2 gap-y-3">
+        <TimeField label="Asked at" ms={question.atMs} onChange={(ms) => patch({ atMs: inside(ms) })} />
+        <Button onClick={() => patch({ atMs: inside(atMs) })}>Ask it here</Button>
+        <TimeField label="Look again from" ms={question.lookAgainMs} onChange={(ms) => patch({ lookAgainMs: ms })} />
+        <Button onClick={() => patch({ lookAgainMs: atMs })}>Look again from here</Button>
       </div>
+      {question.lookAgainMs > question.atMs && <p className="text-sm text-ink2">Looking again begins after the question: {shortTime(question.lookAgainMs)}.</p>}
+      <Button onClick={onRemove}>
+        <KeyCap>Del</KeyCap> Remove this question
+      </Button>
       {problems.length > 0 && (
-        <ul className="list-disc pl-5 text-paint-text">
+        <ul aria-label="Not finished" className="list-disc border-l-[6px] border-steel bg-chalk py-2 pl-8 pr-3">
           {problems.map((problem) => (
             <li key={problem}>{problem}</li>
           ))}
@@ -103,58 +105,32 @@ function OneOfEditor({ body, onChange }: { body: OneOfBody; onChange: (body: One
 }
 
 function NumberEditor({ body, onChange }: { body: NumberBody; onChange: (body: NumberBody) => void }) {
+  const change = (at: number, patch: Partial<NumberBody["slips"][number]>) => onChange({ ...body, slips: body.slips.map((slip, index) => (index === at ? { ...slip, ...patch } : slip)) });
   return (
-    <fieldset className="grid grid-cols-3 items-end gap-2">
+    <fieldset className="grid gap-3">
       <legend className="sr-only">The right value</legend>
-      <TextField label="Value" type="number" step="any" value={body.value} onChange={(event) => onChange({ ...body, value: Number(event.target.value) })} />
-      <TextField label="± tolerance" type="number" step="any" min={0} value={body.tolerance} onChange={(event) => onChange({ ...body, tolerance: Number(event.target.value) })} />
-      <SelectField label="Unit" value={body.unit} onChange={(event) => onChange({ ...body, unit: event.target.value })}>
-        {UNITS.map((unit) => (
-          <option key={unit.symbol}>{unit.symbol}</option>
-        ))}
-      </SelectField>
-    </fieldset>
-  );
-}
-
-function OrderEditor({ body, steps, onChange }: { body: PutInOrderBody; steps: Step[]; onChange: (body: PutInOrderBody) => void }) {
-  const fromSteps = (list: Step[]) => onChange({ ...body, items: list.map((step) => ({ id: crypto.randomUUID(), text: step.title })), neverBefore: [] });
-  const move = (from: number, to: number) => {
-    const items = [...body.items];
-    const [item] = items.splice(from, 1);
-    if (item) items.splice(to, 0, item);
-    onChange({ ...body, items });
-  };
-  return (
-    <fieldset className="grid gap-2">
-      <legend className="mb-1 text-[1.1rem]">In the right order, first on top</legend>
-      {body.items.map((item, index) => (
-        <div key={item.id} className="flex items-end gap-2">
-          <TextField
-            label={`Place ${index + 1}`}
-            value={item.text}
-            maxLength={300}
-            className="flex-1"
-            onChange={(event) => onChange({ ...body, items: body.items.map((other) => (other.id === item.id ? { ...other, text: event.target.value } : other)) })}
-          />
-          <Button aria-label={`Move place ${index + 1} up`} disabled={index === 0} onClick={() => move(index, index - 1)}>
-            ↑
+      <div className="grid grid-cols-3 items-start gap-2">
+        <NumberField label="Value" value={body.value} onChange={(value) => onChange({ ...body, value: value ?? NaN })} />
+        <NumberField label="± within" min={0} value={body.tolerance} onChange={(tolerance) => onChange({ ...body, tolerance: tolerance ?? NaN })} />
+        <SelectField label="Unit" value={body.unit} onChange={(event) => onChange({ ...body, unit: event.target.value })}>
+          {UNITS.map((unit) => (
+            <option key={unit.symbol}>{unit.symbol}</option>
+          ))}
+        </SelectField>
+      </div>
+      {body.slips.map((slip, index) => (
+        // Slips have no id of their own: their place is what they are.
+        <div key={index} className="grid grid-cols-[6rem_1fr_auto] items-end gap-2">
+          <NumberField label="Slip" value={slip.value} onChange={(value) => change(index, { value: value ?? NaN })} />
+          <TextField label="What went wrong" value={slip.hint} maxLength={300} onChange={(event) => change(index, { hint: event.target.value })} />
+          <Button aria-label={`Remove slip ${index + 1}`} onClick={() => onChange({ ...body, slips: body.slips.filter((_, other) => other !== index) })}>
+            ×
           </Button>
-          {body.items.length > 2 && (
-            <Button
-              aria-label={`Remove place ${index + 1}`}
-              onClick={() => onChange({ ...body, items: body.items.filter((other) => other.id !== item.id), neverBefore: body.neverBefore.filter((pair) => !pair.includes(item.id)) })}
-            >
-              ×
-            </Button>
-          )}
         </div>
       ))}
-      <div className="flex flex-wrap gap-2">
-        <Button onClick={() => onChange({ ...body, items: [...body.items, { id: crypto.randomUUID(), text: "" }] })}>Add one</Button>
-        <Button onClick={() => fromSteps(steps)}>Make it from the steps</Button>
-        <Button onClick={() => fromSteps(steps.toReversed())}>Reversed, for refitting</Button>
-      </div>
+      <Button disabled={body.slips.length >= 12} onClick={() => onChange({ ...body, slips: [...body.slips, { value: NaN, hint: "" }] })}>
+        Add a slip that we know
+      </Button>
     </fieldset>
   );
 }

@@ -1,16 +1,28 @@
 "use client";
 
 import { useEffect, useState } from "react";
+import type { Unfinished } from "@/components/bench/keepable";
 import type { SavingState } from "@/components/bench/use-saving";
 
-/** Where the work is: a state that one can trust. */
-export function SavedLine({ state }: { state: SavingState }) {
+/** Where the work is: a state that one can trust. Read out only when it changes, not every second. */
+export function SavedLine({ state, unfinished }: { state: SavingState; unfinished: Unfinished[] }) {
   const [now, setNow] = useState<number | null>(null);
   useEffect(() => {
     const timer = setInterval(() => setNow(Date.now()), 1000);
     return () => clearInterval(timer);
   }, []);
-  return <span role="status">{wordsFor(state, now)}</span>;
+  const words = wordsFor(state, now);
+  return (
+    <span className="whitespace-nowrap">
+      <span aria-hidden>
+        {words}
+        {state.kind === "saved" && unfinished.length > 0 && `, ${unfinished.length} not finished`}
+      </span>
+      <span role="status" className="sr-only">
+        {state.kind === "saved" ? "saved" : words}
+      </span>
+    </span>
+  );
 }
 
 function wordsFor(state: SavingState, now: number | null): string {
@@ -22,11 +34,15 @@ function wordsFor(state: SavingState, now: number | null): string {
     case "refused":
       return "not saved: see below";
     case "conflict":
-      return "not saved: changed elsewhere";
-    case "saved": {
-      if (state.at === null) return "as it was saved";
-      const seconds = Math.max(0, Math.round(((now ?? state.at) - state.at) / 1000));
-      return seconds < 60 ? `saved ${seconds} s ago` : `saved ${Math.round(seconds / 60)} min ago`;
-    }
+      return "kept here: saved elsewhere too";
+    case "saved":
+      return state.at === null ? "nothing to save yet" : `saved${now === null ? "" : ` ${ago(Math.max(0, now - state.at))}`}`;
   }
+}
+
+function ago(ms: number): string {
+  const [seconds, minutes, hours] = [Math.round(ms / 1000), Math.round(ms / 60_000), Math.round(ms / 3_600_000)];
+  if (seconds < 60) return `${seconds} s ago`;
+  if (minutes < 60) return `${minutes} min ago`;
+  return hours < 48 ? `${hours} h ago` : `${Math.round(hours / 24)} days ago`;
 }

@@ -3,11 +3,12 @@ import type { Db } from "@/db/client";
 import type { Question } from "@/lib/core/questions/types";
 import type { Step } from "@/lib/core/steps/types";
 
-export type MarkedRecording = { id: string; title: string; durationMs: number | null; version: number; savedAt: Date | null };
+/** A recording as far as marking out goes. `durationMs` is null until the film was measured. */
+export type MarkedRecording = { id: string; title: string; durationMs: number | null; version: number };
 
 const recordings = (db: Db, organisationId: string, id: string) =>
   db("recordings")
-    .select("id", "title", "duration_ms", "marking_version", "marking_saved_at")
+    .select("id", "title", "duration_ms", "marking_version")
     .where({ organisation_id: organisationId, id })
     .whereNull("hidden_at");
 
@@ -16,9 +17,9 @@ const toRecording = (row: Awaited<ReturnType<typeof recordings>>[number]): Marke
   title: row.title,
   durationMs: row.duration_ms,
   version: row.marking_version,
-  savedAt: row.marking_saved_at,
 });
 
+/** A recording of this organisation that is not put away. */
 export async function findMarkedRecording(db: Db, organisationId: string, id: string): Promise<MarkedRecording | undefined> {
   const row = await recordings(db, organisationId, id).first();
   return row && toRecording(row);
@@ -30,11 +31,13 @@ export async function findMarkedRecordingForUpdate(trx: Knex.Transaction, organi
   return row && toRecording(row);
 }
 
+/** Steps in the order of the film. */
 export async function listSteps(db: Db, recordingId: string): Promise<Step[]> {
   const rows = await db("steps").select("id", "title", "start_ms", "end_ms", "facts").where({ recording_id: recordingId }).orderBy("start_ms");
   return rows.map((row) => ({ id: row.id, title: row.title, startMs: row.start_ms, endMs: row.end_ms, facts: row.facts }));
 }
 
+/** Questions with their answers, in the order of the film. */
 export async function listQuestions(db: Db, recordingId: string): Promise<Question[]> {
   const rows = await db("questions")
     .select("id", "step_id", "at_ms", "prompt", "explanation", "look_again_ms", "safety_critical", "body")
@@ -50,6 +53,12 @@ export async function listQuestions(db: Db, recordingId: string): Promise<Questi
     safetyCritical: row.safety_critical,
     body: row.body,
   }));
+}
+
+/** Which of these ids of steps or questions belong to other recordings already. */
+export async function listTakenIds(db: Db, recordingId: string, ids: readonly string[]): Promise<Set<string>> {
+  const taken = (table: "steps" | "questions") => db(table).select<{ id: string }[]>("id").whereIn("id", ids).whereNot({ recording_id: recordingId });
+  return new Set([...(await taken("steps")), ...(await taken("questions"))].map(({ id }) => id));
 }
 
 /**

@@ -1,31 +1,32 @@
 import { z } from "zod";
 import type { QuestionBody } from "@/lib/core/questions/types";
+import { lineOfText, plainText as text } from "@/lib/schemas/plain-text";
+import { MAX_MS } from "@/lib/schemas/steps";
 
-const text = (most: number) => z.string().trim().max(most);
-const id = z.string().min(1).max(60);
+const id = lineOfText(60).min(1);
 
+/** What is asked and what is right, by kind. What isn't named here is refused. */
 export const questionBodySchema: z.ZodType<QuestionBody> = z.discriminatedUnion("kind", [
-  z.object({
+  z.strictObject({
     kind: z.literal("one_of"),
-    choices: z.array(z.object({ id, text: text(300), right: z.boolean(), why: text(300) })).max(12),
+    choices: z.array(z.strictObject({ id, text: text(300), right: z.boolean(), why: text(300) })).max(12),
   }),
-  z.object({
+  z.strictObject({
     kind: z.literal("number"),
     unit: z.string().min(1).max(20),
     value: z.number(),
     tolerance: z.number().min(0),
-    slips: z.array(z.object({ value: z.number(), hint: text(300) })).max(12),
+    slips: z.array(z.strictObject({ value: z.number(), hint: text(300) })).max(12),
   }),
-  z.object({
+  z.strictObject({
     kind: z.literal("put_in_order"),
-    items: z.array(z.object({ id, text: text(300) })).max(20),
+    items: z.array(z.strictObject({ id, text: text(300) })).max(20),
     neverBefore: z.array(z.tuple([id, id])).max(40),
   }),
 ]);
 
-const MAX_MS = 24 * 3600 * 1000;
-
-export const questionSchema = z.object({
+/** One question as it is kept, with its answer. */
+export const questionSchema = z.strictObject({
   id: z.uuid(),
   stepId: z.uuid(),
   atMs: z.int().min(0).max(MAX_MS),

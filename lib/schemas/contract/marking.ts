@@ -1,23 +1,23 @@
 import { z } from "zod";
 import type { DoorSpec } from "@/lib/schemas/contract/door-spec";
-import { importMarkingSchema, markingSchema } from "@/lib/schemas/marking";
+import { importMarkingSchema, markingSavedSchema, markingSchema, markingViewSchema } from "@/lib/schemas/marking";
 
 const recordingParams = z.object({ org: z.string(), recordingId: z.uuid() });
 
 /** Doors of marking out a recording: steps, facts and questions, also as WebVTT. */
 export const markingDoors = {
   "GET /orgs/{org}/recordings/{recordingId}/marking": {
-    summary: "Steps and questions of a recording",
+    summary: "Steps and questions of a recording, with answers, and who saved them last",
     roles: ["mentor"],
     params: recordingParams,
-    response: markingSchema,
+    response: markingViewSchema,
   },
   "PUT /orgs/{org}/recordings/{recordingId}/marking": {
     summary: "Save the marking out as a whole",
     roles: ["mentor"],
     params: recordingParams,
     body: markingSchema,
-    response: z.object({ version: z.int() }),
+    response: markingSavedSchema,
   },
   "GET /orgs/{org}/recordings/{recordingId}/chapters.vtt": {
     summary: "Steps as a WebVTT chapters track",
@@ -31,11 +31,17 @@ export const markingDoors = {
     params: recordingParams,
     response: { file: "text/vtt" },
   },
+  "GET /orgs/{org}/recordings/{recordingId}/captions.vtt": {
+    summary: "Captions as WebVTT",
+    roles: ["mentor"],
+    params: recordingParams,
+    response: { file: "text/vtt" },
+  },
   "POST /orgs/{org}/recordings/{recordingId}/marking/imports": {
     summary: "Take steps, facts and questions from WebVTT, whole or not at all",
     roles: ["mentor"],
     params: recordingParams,
     body: importMarkingSchema,
-    response: markingSchema,
+    response: markingViewSchema,
   },
 } as const satisfies Record<string, DoorSpec>;

@@ -1,37 +1,42 @@
 import type { Metadata } from "next";
 import Link from "next/link";
+import { notFound } from "next/navigation";
+import { z } from "zod";
 import { Bench } from "@/components/bench/bench";
+import { Page } from "@/components/frame/sheet";
 import { DemoBanner } from "@/components/ui/caution";
+import { EmptyPlace } from "@/components/ui/notice";
 import { requireActor, view } from "@/lib/http/page";
-import { viewBench } from "@/lib/services/marking/view-marking";
+import { viewBench } from "@/lib/services/marking/view-bench";
 
-export const metadata: Metadata = { title: "Bench" };
+export const metadata: Metadata = { title: "Marking out" };
 
 export default async function BenchPage({ params }: { params: Promise<{ org: string; recordingId: string }> }) {
   const { org, recordingId } = await params;
   const actor = await requireActor(org, `/recordings/${recordingId}/bench`);
-  const recording = await view(viewBench(actor, recordingId));
+  if (!z.uuid().safeParse(recordingId).success) notFound();
+  const { title, film } = await view(viewBench(actor, recordingId));
+  const back = `/o/${org}/recordings/${recordingId}`;
   return (
     <>
       {actor.organisation.isDemo && <DemoBanner />}
-      <main id="main" tabIndex={-1} className="outline-none">
-        <div className="flex flex-wrap items-baseline justify-between gap-x-6 gap-y-1 px-4 py-2.5">
-          <h1 className="text-[1.5rem] leading-tight">{recording.title}</h1>
-          <Link href={`/o/${org}/recordings/${recordingId}`} className="inline-flex min-h-11 items-center underline underline-offset-4">
-            Back to the recording
-          </Link>
-        </div>
-        <Bench
-          params={{ org, recordingId }}
-          durationMs={recording.durationMs}
-          version={recording.version}
-          first={{ steps: recording.steps, questions: recording.questions }}
-          source={recording.media.p480 ?? recording.media.p720}
-          poster={recording.media.poster}
-          captions={recording.captions}
-          storyboard={recording.storyboard}
-        />
-      </main>
+      {film ? (
+        <Bench params={{ org, recordingId }} title={title} back={back} film={film} />
+      ) : (
+        <Page>
+          <h1 className="mb-4 text-[1.9rem] leading-[1.05]">{title}</h1>
+          <EmptyPlace
+            title="The film is still being measured"
+            action={
+              <Link href={back} className="inline-flex min-h-11 items-center underline underline-offset-4">
+                See how far it is
+              </Link>
+            }
+          >
+            Steps and questions lie on the film’s own time. They can be set as soon as it plays.
+          </EmptyPlace>
+        </Page>
+      )}
     </>
   );
 }

@@ -1,6 +1,6 @@
 "use client";
 
-import "video.js/dist/video-js.css";
+import "@/components/player/film.css";
 import { useCallback, useEffect, useMemo, useRef, useState } from "react";
 import { api } from "@/components/api/client";
 import { FilmControls } from "@/components/player/film-controls";

@@ -4,13 +4,14 @@ import { loadDemo } from "@/db/seeds/demo/load-demo";
 import type { PutFile } from "@/db/seeds/demo/seed-work";
 import { hashPassword } from "@/lib/auth/passwords";
 import { today } from "@/lib/services/clock";
-import { renditionKey } from "@/storage/keys";
+import { evidenceKey, renditionKey } from "@/storage/keys";
 import { getStore } from "@/storage/store";
 
 const KEY_OF = { "480p": "480p", "720p": "720p", poster: "poster", storyboard_sheet: "storyboard", storyboard_track: "storyboardTrack" } as const;
 
-const putFile: PutFile = async ({ organisationId, recordingId, kind }, path, contentType) => {
-  const storeKey = renditionKey({ organisationId, recordingId }, KEY_OF[kind as keyof typeof KEY_OF]);
+const putFile: PutFile = async ({ organisationId, subjectId, kind }, path, contentType) => {
+  const storeKey =
+    kind === "evidence" ? evidenceKey({ organisationId, evidenceId: subjectId }) : renditionKey({ organisationId, recordingId: subjectId }, KEY_OF[kind]);
   const { sizeBytes } = await getStore().uploadFromFile(storeKey, path, { contentType });
   return { storeKey, sizeBytes };
 };

@@ -8,13 +8,13 @@ import type { DemoTaskKey } from "@/db/seeds/demo/tasks";
  */
 export const STANDINGS: Record<string, string> = {
   //       lift road disc drum bear tyre belt cool batt clut lamp refr serv
-  asha: "   3.   3r   r    o    o    4.   n    o    p    o    o    o    p",
+  asha: "   3.   3r   r    o    o    4.   x    o    p    n    o    o    p",
   tomasz: " 5.   4.   3r   4.   3.   5.   4.   3.   b    2.   4.   o    3n",
   niamh: "  5.   5.   4.   e4.  4r   5.   5.   4.   4.   3.   5.   2.   4.",
   joss: "   4.   3.   x    n    o    3.   x    w3r  p    o    3.   o    o",
   orla: "   3.   2.   p    o    o    3.   3.   o    o    r    2.   o    p",
   milo: "   5.   4b   4.   3.   2.   4.   e3.  3.   4.   n    4.   o    3.",
-  lowri: "  3.   n    x    o    o    2.   o    p    o    o    o    o    o",
+  lowri: "  3.   n    o    o    o    2.   o    p    o    o    o    o    o",
   ewan: "   5.   5.   4n   4.   4.   5.   4.   4.   5.   4.   5.   2.   4r",
 };
 

@@ -19,7 +19,7 @@ export async function loadDemo(db: Knex, { day, passwordHash, putFile }: DemoOpt
     await seedCast(trx, day, passwordHash);
     await seedTasks(trx, day, ledger);
     await seedRecordings(trx, day, ledger, putFile);
-    await seedStandings(trx, day, ledger);
+    await seedStandings(trx, day, ledger, putFile);
   });
   return true;
 }

@@ -1,11 +1,11 @@
 import type { Knex } from "knex";
 import { demoId } from "@/db/seeds/demo/demo-id";
 import { STAFF, APPRENTICES } from "@/db/seeds/demo/cast";
-import { DEMO_FILMS } from "@/db/seeds/demo/films/films";
+import { DEMO_FILMS, mediaPath } from "@/db/seeds/demo/films/films";
 import { plannedStandings, WORKSHOP_OF, type PlannedStanding } from "@/db/seeds/demo/history";
 import type { LedgerWriter } from "@/db/seeds/demo/ledger-writer";
 import { dayFrom, orgId, personId } from "@/db/seeds/demo/seed-cast";
-import { CHANGED_DAYS_AGO, CHANGED_TASK, moduleId, moduleRevisionId, taskId, taskRevisionId } from "@/db/seeds/demo/seed-work";
+import { CHANGED_DAYS_AGO, CHANGED_TASK, type PutFile, moduleId, moduleRevisionId, taskId, taskRevisionId } from "@/db/seeds/demo/seed-work";
 import { metSheet, notYetSheet } from "@/db/seeds/demo/sheets";
 import { DEMO_TASKS, type DemoTaskKey } from "@/db/seeds/demo/tasks";
 import { addMonths } from "@/lib/core/dates";
@@ -26,9 +26,12 @@ type PastSheet = Pair & { daysAgo: number; assessor: string; vehicle: string; le
 const VEHICLES_AT = { vennick: ["DEMO 001", "DEMO 002", "DEMO 003"], saltmarsh: ["DEMO 004", "DEMO 005", "DEMO 006"] } as const;
 
 /** Months of practice, evidence and signed observations, so that each person stands on each task as planned. */
-export async function seedStandings(trx: Knex.Transaction, day: string, ledger: LedgerWriter): Promise<void> {
+export async function seedStandings(trx: Knex.Transaction, day: string, ledger: LedgerWriter, putFile: PutFile): Promise<void> {
   const pairs = plannedStandings();
-  for (const pair of pairs) await seedProgress(trx, day, pair);
+  for (const pair of pairs) {
+    await seedProgress(trx, day, pair);
+    await seedEvidence(trx, day, pair, putFile);
+  }
   const sheets = pairs.flatMap((pair) => pastSheets(pair)).toSorted((a, b) => b.daysAgo - a.daysAgo);
   for (const sheet of sheets) await seedSheet(trx, day, sheet, ledger);
 }
@@ -210,6 +213,28 @@ async function seedProgress(trx: Knex.Transaction, day: string, pair: Pair): Pro
     declared_at: `${dayFrom(day, -waited)}T15:20:00Z`,
     ...(planned.next === "booked" ? { booked_for: `${dayFrom(day, 3)}T09:00:00Z`, booked_by: personId("petra") } : {}),
   });
+}
+
+/** Who waits to be seen has added the photos that the task asks for: stills of the demo's own drawn films. */
+async function seedEvidence(trx: Knex.Transaction, day: string, pair: Pair, putFile: PutFile): Promise<void> {
+  if (pair.planned.next !== "ready" && pair.planned.next !== "booked") return;
+  const organisationId = orgId(WORKSHOP_OF[pair.apprentice] ?? "vennick");
+  for (let index = 0; index < DEMO_TASKS[pair.task].rule.evidencePhotos; index += 1) {
+    const film = DEMO_FILMS[index % DEMO_FILMS.length]?.key ?? "front-brake-discs";
+    const fileId = demoId(`evidence/${pair.apprentice}/${pair.task}/${index}`);
+    const { storeKey, sizeBytes } = await putFile({ organisationId, subjectId: fileId, kind: "evidence" }, mediaPath(film, "poster.jpg"), "image/jpeg");
+    const createdAt = `${dayFrom(day, -25 + index)}T15:00:00Z`;
+    await trx("files").insert({ id: fileId, organisation_id: organisationId, store_key: storeKey, media_type: "image/jpeg", size_bytes: sizeBytes, created_by: personId(pair.apprentice), created_at: createdAt });
+    await trx("evidence").insert({
+      organisation_id: organisationId,
+      apprentice_id: personId(pair.apprentice),
+      task_id: taskId(pair.task),
+      kind: "photo",
+      file_id: fileId,
+      note: "A still from a drawn film, for the demo",
+      created_at: createdAt,
+    });
+  }
 }
 
 /** The workshop's modules are given to its apprentices; who may work on the task has learned it. */

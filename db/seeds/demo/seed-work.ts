@@ -8,9 +8,11 @@ import { DEMO_TASKS, type DemoTaskKey } from "@/db/seeds/demo/tasks";
 import { revisionHash } from "@/lib/core/modules/revision-hash";
 import type { ModuleContent } from "@/lib/core/modules/types";
 
-/** Puts one shipped file into the object store and says where it lies there. */
+type RenditionName = "480p" | "720p" | "poster" | "storyboard_sheet" | "storyboard_track";
+
+/** Puts one shipped file into the object store and says where it lies there. `subjectId` is the recording, or the evidence's file. */
 export type PutFile = (
-  of: { organisationId: string; recordingId: string; kind: string },
+  of: { organisationId: string; subjectId: string; kind: RenditionName | "evidence" },
   path: string,
   contentType: string,
 ) => Promise<{ storeKey: string; sizeBytes: number }>;
@@ -97,7 +99,7 @@ async function seedRecording(trx: Knex.Transaction, day: string, film: DemoFilm,
   for (const name of MEDIA_FILES) {
     const rendition = name in RENDITION_OF ? RENDITION_OF[name as keyof typeof RENDITION_OF] : undefined;
     if (!rendition) continue;
-    const at = { organisationId: organisation, recordingId: recordingId(film.key), kind: rendition.kind };
+    const at = { organisationId: organisation, subjectId: recordingId(film.key), kind: rendition.kind };
     const { storeKey, sizeBytes } = await putFile(at, mediaPath(film.key, name), rendition.type);
     const id = demoId(`file/${film.key}/${name}`);
     await trx("files").insert({ id, organisation_id: organisation, store_key: storeKey, media_type: rendition.type, size_bytes: sizeBytes, created_at: filmedAt });

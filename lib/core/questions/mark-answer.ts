@@ -3,7 +3,8 @@ import { convert } from "@/lib/core/units/convert";
 import { findUnit, UNITS } from "@/lib/core/units/units";
 
 /**
- * Marks an answer. Ids are the question's own (see `unmapAnswer`). A known slip is named, without giving the answer away.
+ * Marks an answer. Ids are the question's own (see `unmapAnswer`). A known slip is named in words: the unit, a factor of ten, the sign,
+ * a slip that the author listed; of an order, the first thing that stands wrong, so that it can be tried again.
  * @throws AppError("invalid_input") for a unit of another quantity
  */
 export function markAnswer(question: Question, given: GivenAnswer): Marked {
@@ -27,26 +28,35 @@ const within = (value: number, target: number, tolerance: number): boolean =>
 function markNumber(body: NumberBody, value: number, unit: string): Marked {
   const converted = convert(value, unit, body.unit);
   if (within(converted, body.value, body.tolerance)) return { right: true, diagnosis: null };
-  const fits = (candidate: number) => within(candidate, body.value, body.tolerance);
-  const slip = body.slips.find((candidate) => within(converted, candidate.value, body.tolerance));
-  if (slip) return { right: false, diagnosis: slip.hint };
-  const mistaken = unitMistakenFor(body, value, unit);
-  if (mistaken) return { right: false, diagnosis: `That would be right in ${mistaken}: the size is good, the unit is not.` };
-  if (fits(converted * 10) || fits(converted / 10)) return { right: false, diagnosis: "Out by a factor of ten. Look at the decimal point." };
-  if (fits(-converted)) return { right: false, diagnosis: "The sign is the wrong way round." };
-  return { right: false, diagnosis: null };
+  return { right: false, diagnosis: listedSlip(body, converted) ?? likelySlip(body, value, unit) };
 }
 
-/** Another unit of the same quantity in which the bare number would have been right. */
-function unitMistakenFor(body: NumberBody, value: number, unit: string): string | null {
+/** The hint of the listed slip that the value comes nearest to. */
+function listedSlip(body: NumberBody, converted: number): string | null {
+  const near = body.slips.filter((slip) => within(converted, slip.value, body.tolerance));
+  const [nearest] = near.toSorted((a, b) => Math.abs(converted - a.value) - Math.abs(converted - b.value));
+  return nearest?.hint ?? null;
+}
+
+/**
+ * What anybody's hand slips at: the unit, the decimal point, the sign. Of several that would make the answer right, the one that comes
+ * nearest: 10 for 100 N·m is a decimal point, though 10 kgf·m are near 100 N·m too.
+ */
+function likelySlip(body: NumberBody, value: number, unit: string): string | null {
+  const converted = convert(value, unit, body.unit);
   const used = findUnit(unit);
-  const other = UNITS.find(
-    (candidate) =>
-      candidate.quantity === used?.quantity &&
-      candidate.symbol !== used.symbol &&
-      within(convert(value, candidate.symbol, body.unit), body.value, Math.max(body.tolerance, Math.abs(body.value) * 0.01)),
-  );
-  return other?.symbol ?? null;
+  const others = UNITS.filter((other) => other.quantity === used?.quantity && other.symbol !== used.symbol);
+  const causes = [
+    ...others.map(({ symbol }) => ({ meant: convert(value, symbol, body.unit), says: `That would be right in ${symbol}: the size is good, the unit is not.` })),
+    ...[converted * 10, converted / 10].map((meant) => ({ meant, says: "Out by a factor of ten. Look at the decimal point." })),
+    { meant: -converted, says: "The sign is the wrong way round." },
+  ];
+  // A figure that was turned into another unit is rounded: a hundredth is allowed at least. A tolerance that is wide beside the value
+  // (0 ± 0.01) would make a slip of every miss: a tenth at most.
+  const size = Math.abs(body.value);
+  const room = Math.max(size * 0.01, Math.min(body.tolerance, size * 0.1));
+  const [likeliest] = causes.filter(({ meant }) => within(meant, body.value, room)).toSorted((a, b) => Math.abs(a.meant - body.value) - Math.abs(b.meant - body.value));
+  return likeliest?.says ?? null;
 }
 
 function markOrder(body: PutInOrderBody, itemIds: string[]): Marked {
@@ -54,6 +64,7 @@ function markOrder(body: PutInOrderBody, itemIds: string[]): Marked {
   const complete = itemIds.length === right.length && new Set(itemIds).size === right.length && itemIds.every((id) => right.includes(id));
   if (!complete) return { right: false, diagnosis: "Every item stands in the order once." };
   const textOf = (id: string) => body.items.find((item) => item.id === id)?.text ?? "";
+  // What can hurt somebody is said first, whatever else is wrong.
   const dangerous = body.neverBefore.find(([first, second]) => itemIds.indexOf(first) < itemIds.indexOf(second));
   if (dangerous) return { right: false, diagnosis: `“${textOf(dangerous[0])}” before “${textOf(dangerous[1])}” can hurt somebody.` };
   const firstWrong = itemIds.findIndex((id, position) => id !== right[position]);

@@ -1,7 +1,7 @@
 /** A played stretch [startMs, endMs) in whole ms on the recording's axis. */
 export type Span = readonly [startMs: number, endMs: number];
 
-/** The same ground without overlaps, in order; empty and backward spans are dropped, touching ones joined. */
+/** The same ground without overlaps, in order; empty and backward spans and what is no number are dropped, touching ones joined. */
 export function unionSpans(spans: readonly Span[]): Span[] {
   const united: [number, number][] = [];
   for (const [start, end] of spans.filter(([start, end]) => end > start).toSorted((a, b) => a[0] - b[0])) {
@@ -17,27 +17,35 @@ export function coveredMs(spans: readonly Span[], startMs: number, endMs: number
   return unionSpans(spans).reduce((sum, [from, to]) => sum + Math.max(0, Math.min(to, endMs) - Math.max(from, startMs)), 0);
 }
 
-/** Share of a step that was played, 0–1. */
+/** Share of a step that was played, 0–1; 0 of a step without length. Never rounded: 0.9499 is not 0.95. */
 export function seenShare(spans: readonly Span[], step: { startMs: number; endMs: number }): number {
-  return coveredMs(spans, step.startMs, step.endMs) / (step.endMs - step.startMs);
+  const lengthMs = step.endMs - step.startMs;
+  return lengthMs > 0 ? coveredMs(spans, step.startMs, step.endMs) / lengthMs : 0;
 }
 
-/** A little more than the clock says: reports travel, and a player's clock and ours never quite agree. */
+/** A little more than the clock says: reports travel, and a player's clock and ours never quite agree. At most this much a report, … */
 export const ALLOWANCE_MS = 3000;
+/** … and at most this share of the time that passed: a report that is sent over and over earns nothing. */
+const ALLOWANCE_SHARE = 0.5;
 /** The fastest rate that the player offers. */
 export const MAX_RATE = 2;
+/** The slowest one that is believed. */
+const MIN_RATE = 0.25;
 
 /**
- * What the server accepts of a report: never more than could have been played since the last one. Spans are united and clipped to the
- * recording, then taken in the order given until the time is used up; the one that goes over is cut.
- * @param of.elapsedMs  wall time since the person's last report from any tab or device
+ * What the server accepts of a report: never more than could have been played since the last one, that is time passed × rate and a small
+ * allowance. Spans are united and clipped to the recording, then taken in order until the time is used up; the one that goes over is cut.
+ * @param of.reported   played stretches in ms, in any order; what is no stretch is passed over
+ * @param of.elapsedMs  wall time since the person's last report from any tab or device, by the server's clock
  * @param of.rate       claimed rate of play; held to 0.25–MAX_RATE
+ * @returns spans in whole ms, in order, without overlap
  */
 export function acceptSpans(of: { reported: readonly Span[]; durationMs: number; elapsedMs: number; rate: number }): Span[] {
-  const rate = Math.min(MAX_RATE, Math.max(0.25, of.rate));
-  let left = Math.floor(Math.max(0, of.elapsedMs) * rate) + ALLOWANCE_MS;
+  const elapsedMs = of.elapsedMs > 0 ? of.elapsedMs : 0;
+  const rate = Math.min(MAX_RATE, Math.max(MIN_RATE, Number.isFinite(of.rate) ? of.rate : 1));
+  let left = Math.floor(elapsedMs * rate + Math.min(ALLOWANCE_MS, elapsedMs * ALLOWANCE_SHARE));
   const accepted: Span[] = [];
-  const clipped = of.reported.map(([start, end]): Span => [Math.max(0, Math.floor(start)), Math.min(of.durationMs, Math.floor(end))]);
+  const clipped = of.reported.map(([start, end]): Span => [Math.max(0, Math.ceil(start)), Math.min(of.durationMs, Math.floor(end))]);
   for (const [start, end] of unionSpans(clipped)) {
     const taken = Math.min(end - start, left);
     if (taken <= 0) break;

@@ -28,3 +28,11 @@ export async function view<T>(load: Promise<T>): Promise<T> {
     throw error;
   }
 }
+
+const UUID = /^[0-9a-f]{8}(-[0-9a-f]{4}){3}-[0-9a-f]{12}$/;
+
+/** An id in the address that can't be one is an address that isn't there. Returns it, so that it reads as a value. */
+export function addressId(text: string): string {
+  if (!UUID.test(text)) notFound();
+  return text;
+}

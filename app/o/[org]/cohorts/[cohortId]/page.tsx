@@ -9,7 +9,7 @@ import { PrintButton } from "@/components/ui/print-button";
 import { LinkButton } from "@/components/ui/button";
 import { DataTable } from "@/components/ui/data-table";
 import { EmptyPlace } from "@/components/ui/notice";
-import { requireActor, view } from "@/lib/http/page";
+import { addressId, requireActor, view } from "@/lib/http/page";
 import { viewCohort, type CohortView } from "@/lib/services/cohorts/view-cohort";
 
 export const metadata: Metadata = { title: "Cohort" };
@@ -18,6 +18,7 @@ type CohortPageProps = { params: Promise<{ org: string; cohortId: string }>; sea
 
 export default async function CohortPage({ params, searchParams }: CohortPageProps) {
   const { org, cohortId } = await params;
+  addressId(cohortId);
   const actor = await requireActor(org, `/cohorts/${cohortId}`);
   const { name, plate } = await view(viewCohort(actor, cohortId));
   const asTable = (await searchParams).show === "table";

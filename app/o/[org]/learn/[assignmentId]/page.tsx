@@ -5,13 +5,14 @@ import { LearnPlayer } from "@/components/player/learn-player";
 import { LinkButton } from "@/components/ui/button";
 import { DemoBanner } from "@/components/ui/caution";
 import { formatDay } from "@/lib/core/dates";
-import { requireActor, view } from "@/lib/http/page";
+import { addressId, requireActor, view } from "@/lib/http/page";
 import { viewLearning } from "@/lib/services/learning/view-learning";
 
 export const metadata: Metadata = { title: "Module" };
 
 export default async function LearnModulePage({ params }: { params: Promise<{ org: string; assignmentId: string }> }) {
   const { org, assignmentId } = await params;
+  addressId(assignmentId);
   const actor = await requireActor(org, `/learn/${assignmentId}`);
   const module = await view(viewLearning(actor, assignmentId));
   return (

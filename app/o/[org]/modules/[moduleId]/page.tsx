@@ -7,7 +7,7 @@ import { PublishPanel } from "@/components/modules/publish-panel";
 import { DemoBanner } from "@/components/ui/caution";
 import { Tag, Value } from "@/components/ui/tag";
 import { formatDay } from "@/lib/core/dates";
-import { requireActor, view } from "@/lib/http/page";
+import { addressId, requireActor, view } from "@/lib/http/page";
 import { today } from "@/lib/services/clock";
 import { viewModule, type ModuleView } from "@/lib/services/modules/view-module";
 
@@ -17,6 +17,7 @@ const DAY_MS = 86_400_000;
 
 export default async function ModulePage({ params }: { params: Promise<{ org: string; moduleId: string }> }) {
   const { org, moduleId } = await params;
+  addressId(moduleId);
   const actor = await requireActor(org, `/modules/${moduleId}`);
   const module = await view(viewModule(actor, moduleId));
   const newest = module.revisions[0];

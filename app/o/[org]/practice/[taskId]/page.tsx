@@ -10,7 +10,7 @@ import { RunForm } from "@/components/practice/run-form";
 import { DemoBanner } from "@/components/ui/caution";
 import { Tag } from "@/components/ui/tag";
 import { formatDay } from "@/lib/core/dates";
-import { requireActor, view } from "@/lib/http/page";
+import { addressId, requireActor, view } from "@/lib/http/page";
 import { today } from "@/lib/services/clock";
 import { viewPracticeTask, type PracticeTaskView } from "@/lib/services/practice/view-practice-task";
 
@@ -18,6 +18,7 @@ export const metadata: Metadata = { title: "Task" };
 
 export default async function PracticeTaskPage({ params }: { params: Promise<{ org: string; taskId: string }> }) {
   const { org, taskId } = await params;
+  addressId(taskId);
   const actor = await requireActor(org, `/practice/${taskId}`);
   const task = await view(viewPracticeTask(actor, taskId));
   const { content, standing } = task;

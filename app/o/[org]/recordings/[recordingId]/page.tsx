@@ -4,7 +4,7 @@ import { z } from "zod";
 import { Page } from "@/components/frame/sheet";
 import { RecordingSheet } from "@/components/recordings/recording-sheet";
 import { DemoBanner } from "@/components/ui/caution";
-import { requireActor, view } from "@/lib/http/page";
+import { addressId, requireActor, view } from "@/lib/http/page";
 import { viewRecording } from "@/lib/services/recordings/view-recording";
 import { viewRecordingMedia } from "@/lib/services/recordings/view-recording-media";
 import { viewVehicles } from "@/lib/services/recordings/view-vehicles";
@@ -13,6 +13,7 @@ export const metadata: Metadata = { title: "Recording" };
 
 export default async function RecordingPage({ params }: { params: Promise<{ org: string; recordingId: string }> }) {
   const { org, recordingId } = await params;
+  addressId(recordingId);
   const actor = await requireActor(org, `/recordings/${recordingId}`);
   if (!z.uuid().safeParse(recordingId).success) notFound();
   const recording = await view(viewRecording(actor, recordingId));

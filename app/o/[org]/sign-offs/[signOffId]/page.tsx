@@ -10,7 +10,7 @@ import { Value } from "@/components/ui/tag";
 import { formatDay } from "@/lib/core/dates";
 import { standingLabel } from "@/lib/core/standing/standing-label";
 import { LEVEL_LABEL } from "@/lib/core/tasks/types";
-import { requireActor, view } from "@/lib/http/page";
+import { addressId, requireActor, view } from "@/lib/http/page";
 import { viewSignOff, type SignOffView } from "@/lib/services/sign-offs/view-sign-off";
 
 export const metadata: Metadata = { title: "Sign-off" };
@@ -19,6 +19,7 @@ type SignOffPageProps = { params: Promise<{ org: string; signOffId: string }>; s
 
 export default async function SignOffPage({ params, searchParams }: SignOffPageProps) {
   const { org, signOffId } = await params;
+  addressId(signOffId);
   const actor = await requireActor(org, `/sign-offs/${signOffId}`);
   const { signOff, marks, changes, held, canWithdraw, proof } = await view(viewSignOff(actor, signOffId));
   const standing = { held, next: signOff.outcome === "not_yet" ? ("not_yet" as const) : ("open" as const) };

@@ -4,13 +4,14 @@ import { Page, Sheet, SheetPart } from "@/components/frame/sheet";
 import { CriteriaList } from "@/components/practice/criteria-list";
 import { DemoBanner } from "@/components/ui/caution";
 import { LEVEL_LABEL, type TaskRule } from "@/lib/core/tasks/types";
-import { requireActor, view } from "@/lib/http/page";
+import { addressId, requireActor, view } from "@/lib/http/page";
 import { viewTask } from "@/lib/services/tasks/view-tasks";
 
 export const metadata: Metadata = { title: "Task" };
 
 export default async function TaskPage({ params }: { params: Promise<{ org: string; taskId: string }> }) {
   const { org, taskId } = await params;
+  addressId(taskId);
   const actor = await requireActor(org, `/tasks/${taskId}`);
   const task = await view(viewTask(actor, taskId));
   return (

@@ -6,13 +6,14 @@ import { Bench } from "@/components/bench/bench";
 import { Page } from "@/components/frame/sheet";
 import { DemoBanner } from "@/components/ui/caution";
 import { EmptyPlace } from "@/components/ui/notice";
-import { requireActor, view } from "@/lib/http/page";
+import { addressId, requireActor, view } from "@/lib/http/page";
 import { viewBench } from "@/lib/services/marking/view-bench";
 
 export const metadata: Metadata = { title: "Marking out" };
 
 export default async function BenchPage({ params }: { params: Promise<{ org: string; recordingId: string }> }) {
   const { org, recordingId } = await params;
+  addressId(recordingId);
   const actor = await requireActor(org, `/recordings/${recordingId}/bench`);
   if (!z.uuid().safeParse(recordingId).success) notFound();
   const { title, film } = await view(viewBench(actor, recordingId));

@@ -144,6 +144,8 @@ export function LearnPlayer({ params, steps, questions, progress: first, media }
           onToggle={toggle}
           onSeek={seek}
           onRate={(value) => {
+            // What was played so far is told at the rate at which it was played.
+            void send();
             setRate(value);
             withFilm((film) => film.setRate(value));
           }}

@@ -1,3 +1,4 @@
+import { createHash } from "node:crypto";
 import { readFileSync } from "node:fs";
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
@@ -10,10 +11,13 @@ const json = (name: string) => JSON.parse(readFileSync(`${folder}/${name}`, "utf
 
 // Source: the web platform's published file-parsing tests (see vectors/webvtt/SOURCE.md). Cue settings are not ours to read.
 describe("file parsing, published vectors", () => {
-  type Case = { file: string; cues: { start: number; end: number; id: string; text: string }[] };
-  test.each(json("file-expected.json").cases as Case[])("$file", ({ file, cues }) => {
-    const read = readVtt(readFileSync(`${folder}/${file}`, "utf8")).cues;
-    expect(read.map(({ id, text, startMs, endMs }) => ({ id, text, startMs, endMs }))).toEqual(
+  type Case = { file: string; sha256: string; signatureOk: boolean; cues: { start: number; end: number; id: string; text: string }[] };
+  test.each(json("file-expected.json").cases as Case[])("$file", ({ file, sha256, signatureOk, cues }) => {
+    const bytes = readFileSync(`${folder}/${file}`);
+    expect(createHash("sha256").update(bytes).digest("hex")).toBe(sha256);
+    const read = readVtt(bytes.toString("utf8"));
+    expect(read.problems.some(({ message }) => message === "A WebVTT file begins with the word WEBVTT.")).toBe(!signatureOk);
+    expect(read.cues.map(({ id, text, startMs, endMs }) => ({ id, text, startMs, endMs }))).toEqual(
       cues.map(({ id, text, start, end }) => ({ id, text, startMs: Math.round(start * 1000), endMs: Math.round(end * 1000) })),
     );
   });

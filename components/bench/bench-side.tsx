@@ -43,7 +43,7 @@ export function BenchSide({ chosen, current, draft, atMs, durationMs, act, onCho
       {current && (
         <div className="mb-3 flex items-center justify-between gap-2 border-b border-rule pb-3">
           <Button aria-label="The step before" disabled={number <= 1} onClick={() => go(steps[number - 2])}>
-            <KeyCap>[</KeyCap>
+            <KeyCap>[</KeyCap>‹
           </Button>
           <h2 className="min-w-0 text-center text-[1.3rem] leading-tight">
             {question ? `Question ${questions.indexOf(question) + 1} of ${questions.length}` : `Step ${number} of ${steps.length}`}
@@ -52,7 +52,7 @@ export function BenchSide({ chosen, current, draft, atMs, durationMs, act, onCho
             </span>
           </h2>
           <Button aria-label="The step after" disabled={number >= steps.length} onClick={() => go(steps[number])}>
-            <KeyCap>]</KeyCap>
+            ›<KeyCap>]</KeyCap>
           </Button>
         </div>
       )}

@@ -10,7 +10,7 @@ import { emptyBody } from "@/components/bench/question-editor";
 import { Ruler, type Chosen } from "@/components/bench/ruler";
 import { SavedLine } from "@/components/bench/saved-line";
 import { SavingNotices } from "@/components/bench/saving-notices";
-import { Transport } from "@/components/bench/transport";
+import { Transport, ZOOMS } from "@/components/bench/transport";
 import { useBenchKeys } from "@/components/bench/use-bench-keys";
 import { usePlace } from "@/components/bench/use-place";
 import { useSaving } from "@/components/bench/use-saving";
@@ -35,6 +35,8 @@ export type BenchProps = {
 };
 
 const SECOND_MS = 1000;
+/** A second of film on the ruler at the least, when the bench opens: on a phone the whole film would be too fine to hit. */
+const ROOMY_PX = 2;
 /** One picture of a film at 25 a second. */
 const PICTURE_MS = 40;
 
@@ -46,6 +48,7 @@ export function Bench({ params, title, back, film }: BenchProps) {
   const [chosen, setChosen] = useState<Chosen>(null);
   const [zoom, setZoom] = useState(1);
   const [dialog, setDialog] = useState<"keys" | "files" | null>(null);
+  const fit = useCallback((px: number) => setZoom(ZOOMS.find((candidate) => (px * candidate * SECOND_MS) / durationMs >= ROOMY_PX) ?? 1), [durationMs]);
   const place = usePlace(durationMs);
   const { video, atMs, seek, step: move } = place;
   const load = useCallback((draft: Draft) => {
@@ -122,7 +125,7 @@ export function Bench({ params, title, back, film }: BenchProps) {
   );
 
   return (
-    <main id="main" tabIndex={-1} className="grid outline-none lg:grid-cols-[minmax(0,1fr)_26rem]">
+    <main id="main" tabIndex={-1} className="isolate grid outline-none max-sm:[&_kbd]:hidden lg:grid-cols-[minmax(0,1fr)_26rem]">
       <div className="min-w-0" onMouseDown={keepFocusOffButtons}>
         <div className="flex flex-wrap items-center justify-between gap-x-5 px-3 py-1 sm:px-4">
           <h1 className="min-w-0 text-[1.35rem] leading-tight">
@@ -144,10 +147,10 @@ export function Bench({ params, title, back, film }: BenchProps) {
               playsInline
               onClick={place.toggle}
               {...place.handlers}
-              className="mx-auto block aspect-video max-h-[30dvh] w-full lg:max-h-[calc(100dvh-29rem)] lg:min-h-60"
+              className="mx-auto block aspect-video max-h-[30dvh] w-full lg:max-h-[calc(100dvh-33rem)] lg:min-h-60"
             />
           ) : (
-            <p className="mx-auto grid aspect-video max-h-[30dvh] w-full place-items-center p-6 text-center text-[#fff] lg:max-h-[calc(100dvh-29rem)]">
+            <p className="mx-auto grid aspect-video max-h-[30dvh] w-full place-items-center p-6 text-center text-[#fff] lg:max-h-[calc(100dvh-33rem)]">
               The film is still being prepared. Times can be typed; it plays here as soon as it is ready.
             </p>
           )}
@@ -164,7 +167,7 @@ export function Bench({ params, title, back, film }: BenchProps) {
             onZoom={setZoom}
           />
         </div>
-        <Ruler durationMs={durationMs} atMs={atMs} zoom={zoom} draft={state.draft} captions={film.captions} storyboard={film.storyboard} chosen={chosen} onSeek={seek} onChoose={choose} act={act} />
+        <Ruler durationMs={durationMs} atMs={atMs} zoom={zoom} draft={state.draft} captions={film.captions} storyboard={film.storyboard} chosen={chosen} onSeek={seek} onChoose={choose} act={act} onRoom={fit} />
         <div className="flex flex-wrap gap-2 px-3 py-3 sm:px-4">
           {here ? (
             <Button onClick={split}>

@@ -77,29 +77,40 @@ function OneOfEditor({ body, onChange }: { body: OneOfBody; onChange: (body: One
     <fieldset className="grid gap-3">
       <legend className="mb-1 text-[1.1rem]">Choices; one is right</legend>
       {body.choices.map((choice, index) => (
-        <div key={choice.id} className="grid grid-cols-[2.75rem_1fr] gap-2 border-l-4 border-rule pl-2">
-          <label className="grid min-h-11 place-items-center">
+        <div key={choice.id} className={`grid grid-cols-[2.75rem_minmax(0,1fr)] gap-x-1 rounded border bg-chalk py-2 pr-3 ${choice.right ? "border-strong" : "border-rule"}`}>
+          <label className="grid min-h-11 place-items-center self-center">
             <span className="sr-only">Choice {index + 1} is right</span>
             <input
               type="radio"
               name="right-choice"
-              className="size-5 accent-(--strong)"
+              className="size-6 accent-(--strong)"
               checked={choice.right}
               onChange={() => onChange({ ...body, choices: body.choices.map((other) => ({ ...other, right: other.id === choice.id })) })}
             />
           </label>
-          <div className="grid gap-1">
-            <TextField label={`Choice ${index + 1}`} value={choice.text} maxLength={300} onChange={(event) => change(choice.id, { text: event.target.value })} />
-            <TextField label="Why, to whoever chooses it" value={choice.why} maxLength={300} onChange={(event) => change(choice.id, { why: event.target.value })} />
-            {body.choices.length > 2 && (
-              <Button kind="quiet" onClick={() => onChange({ ...body, choices: body.choices.filter((other) => other.id !== choice.id) })}>
-                Remove choice {index + 1}
+          <div className="grid gap-1.5">
+            <div className="flex items-end gap-2">
+              <TextField
+                className="min-w-0 flex-1"
+                label={choice.right ? `Choice ${index + 1}, the right one` : `Choice ${index + 1}`}
+                value={choice.text}
+                maxLength={300}
+                onChange={(event) => change(choice.id, { text: event.target.value })}
+              />
+              <Button
+                className="w-11 px-0!"
+                aria-label={`Remove choice ${index + 1}`}
+                disabled={body.choices.length <= 2}
+                onClick={() => onChange({ ...body, choices: body.choices.filter((other) => other.id !== choice.id) })}
+              >
+                ×
               </Button>
-            )}
+            </div>
+            <TextField label="What to say to it" value={choice.why} maxLength={300} onChange={(event) => change(choice.id, { why: event.target.value })} />
           </div>
         </div>
       ))}
-      <Button onClick={() => onChange({ ...body, choices: [...body.choices, { id: crypto.randomUUID(), text: "", right: false, why: "" }] })}>Add a choice</Button>
+      <Button disabled={body.choices.length >= 12} onClick={() => onChange({ ...body, choices: [...body.choices, { id: crypto.randomUUID(), text: "", right: false, why: "" }] })}>Add a choice</Button>
     </fieldset>
   );
 }

@@ -2,7 +2,9 @@
 
 import { useEffect, useRef, useState, type ReactNode } from "react";
 import type { BenchAct, Draft } from "@/components/bench/bench-state";
+import { CaptionLane } from "@/components/bench/caption-lane";
 import { PictureLane, type Storyboard } from "@/components/bench/picture-lane";
+import { QuestionLane } from "@/components/bench/question-lane";
 import { StepLane } from "@/components/bench/step-lane";
 import { shortTime } from "@/components/bench/time-field";
 import { useDrag } from "@/components/bench/use-drag";
@@ -21,23 +23,29 @@ type RulerProps = {
   onSeek: (ms: number) => void;
   onChoose: (chosen: Chosen) => void;
   act: (act: BenchAct) => void;
+  /** Told once: how wide the ruler's place on the page is. */
+  onRoom: (px: number) => void;
 };
 
 /** One ruler for everything on the bench: time, pictures, steps, questions, captions. */
 export function Ruler(props: RulerProps) {
-  const { durationMs, atMs, zoom, draft, captions, chosen } = props;
+  const { durationMs, atMs, zoom, draft, captions, chosen, onRoom } = props;
   const scroller = useRef<HTMLDivElement>(null);
   const [seen, setSeen] = useState(0);
   const percent = (ms: number) => `${(ms / durationMs) * 100}%`;
-  const width = (from: number, to: number) => `${((to - from) / durationMs) * 100}%`;
 
   useEffect(() => {
     const element = scroller.current;
     if (!element) return;
-    const watch = new ResizeObserver(() => setSeen(element.clientWidth));
+    let told = false;
+    const watch = new ResizeObserver(() => {
+      setSeen(element.clientWidth);
+      if (!told) onRoom(element.clientWidth);
+      told = true;
+    });
     watch.observe(element);
     return () => watch.disconnect();
-  }, []);
+  }, [onRoom]);
 
   // Zoomed in, the place of the film stays in sight.
   useEffect(() => {
@@ -53,8 +61,8 @@ export function Ruler(props: RulerProps) {
         <LaneName className="h-9">Time</LaneName>
         <LaneName className="h-13">Picture</LaneName>
         <LaneName className="h-14">Steps</LaneName>
-        <LaneName className="h-12">Questions</LaneName>
-        <LaneName className="h-9">Captions</LaneName>
+        <LaneName className="h-15">Questions</LaneName>
+        <LaneName className="h-10">Captions</LaneName>
       </div>
       <div ref={scroller} className="relative overflow-x-auto overflow-y-hidden [scrollbar-width:thin]">
         <div className="relative" style={{ width: `${zoom * 100}%` }}>
@@ -63,43 +71,8 @@ export function Ruler(props: RulerProps) {
             <PictureLane storyboard={props.storyboard} durationMs={durationMs} widthPx={seen * zoom} />
           </Scrubber>
           <StepLane durationMs={durationMs} atMs={atMs} steps={draft.steps} chosen={chosen} onSeek={props.onSeek} onChoose={props.onChoose} act={props.act} />
-          <div className="relative h-12 border-b border-rule">
-            {draft.questions.map((question, index) => {
-              const on = chosen?.kind === "question" && chosen.id === question.id;
-              return (
-                <button
-                  key={question.id}
-                  type="button"
-                  aria-pressed={on}
-                  aria-label={`Question ${index + 1} at ${formatClock(question.atMs)}: ${question.prompt || "not written yet"}${question.safetyCritical ? ", safety-critical" : ""}`}
-                  title={question.prompt || "not written yet"}
-                  onClick={() => props.onChoose({ kind: "question", id: question.id })}
-                  style={{ left: percent(question.atMs) }}
-                  className={`group absolute inset-y-0 grid w-11 -translate-x-1/2 place-items-center ${on ? "z-10" : ""}`}
-                >
-                  <span
-                    className={`grid size-7 place-items-center font-plate text-[1rem] font-semibold leading-none ${question.safetyCritical ? "rounded" : "rounded-full"} ${
-                      on ? "border-2 border-line bg-chalk text-ink ring-2 ring-line" : "bg-ink text-chalk"
-                    }`}
-                  >
-                    {index + 1}
-                  </span>
-                </button>
-              );
-            })}
-          </div>
-          <div className="relative h-9" aria-hidden>
-            {captions.map((caption) => (
-              <span
-                key={caption.startMs}
-                title={caption.text}
-                className="absolute inset-y-1.5 overflow-hidden text-ellipsis whitespace-nowrap border-l border-rule pl-1 text-[0.8rem] text-ink2"
-                style={{ left: percent(caption.startMs), width: width(caption.startMs, caption.endMs) }}
-              >
-                {caption.text}
-              </span>
-            ))}
-          </div>
+          <QuestionLane durationMs={durationMs} widthPx={seen * zoom} questions={draft.questions} chosen={chosen} onChoose={props.onChoose} />
+          <CaptionLane durationMs={durationMs} widthPx={seen * zoom} atMs={atMs} captions={captions} />
           <span aria-hidden className="pointer-events-none absolute inset-y-0 z-20 -ml-px w-0.5 bg-line" style={{ left: percent(atMs) }}>
             <span className="absolute -left-[5px] top-0 border-x-6 border-t-8 border-x-transparent border-t-line" />
           </span>

@@ -3,6 +3,7 @@
 import { useEffect, useState } from "react";
 import type { Unfinished } from "@/components/bench/keepable";
 import type { SavingState } from "@/components/bench/use-saving";
+import { formatDay } from "@/lib/core/dates";
 
 /** Where the work is: a state that one can trust. Read out only when it changes, not every second. */
 export function SavedLine({ state, unfinished }: { state: SavingState; unfinished: Unfinished[] }) {
@@ -36,13 +37,14 @@ function wordsFor(state: SavingState, now: number | null): string {
     case "conflict":
       return "kept here: saved elsewhere too";
     case "saved":
-      return state.at === null ? "nothing to save yet" : `saved${now === null ? "" : ` ${ago(Math.max(0, now - state.at))}`}`;
+      return state.at === null ? "nothing to save yet" : `saved${now === null ? "" : ` ${ago(state.at, now)}`}`;
   }
 }
 
-function ago(ms: number): string {
+function ago(at: number, now: number): string {
+  const ms = Math.max(0, now - at);
   const [seconds, minutes, hours] = [Math.round(ms / 1000), Math.round(ms / 60_000), Math.round(ms / 3_600_000)];
   if (seconds < 60) return `${seconds} s ago`;
   if (minutes < 60) return `${minutes} min ago`;
-  return hours < 48 ? `${hours} h ago` : `${Math.round(hours / 24)} days ago`;
+  return hours < 24 ? `${hours} h ago` : formatDay(new Date(at).toISOString().slice(0, 10));
 }

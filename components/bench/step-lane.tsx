@@ -36,7 +36,7 @@ export function StepLane({ durationMs, atMs, steps, chosen, onSeek, onChoose, ac
             onClick={() => onChoose({ kind: "step", id: step.id })}
             style={{ left: `${(step.startMs / durationMs) * 100}%`, width: `max(calc(${((step.endMs - step.startMs) / durationMs) * 100}% - 1px), 4px)` }}
             className={`absolute inset-y-1 flex items-center gap-1.5 overflow-hidden whitespace-nowrap rounded border-[1.5px] px-1.5 text-left font-plate text-[1.05rem] font-semibold leading-none ${
-              on ? "border-strong bg-strong text-strong-ink" : `border-strong text-strong ${here ? "bg-rule" : "bg-tint"}`
+              on ? "border-strong bg-strong pl-3 text-strong-ink" : `border-strong text-strong ${here ? "bg-rule" : "bg-tint"}`
             }`}
           >
             <span className="tabular opacity-80">{index + 1}</span>

@@ -1,5 +1,5 @@
 import { expect, test } from "vitest";
-import { beginBench, bench, type BenchAct, type Draft } from "@/components/bench/bench-state";
+import { beginBench, bench, NAMELESS, stepAt, type BenchAct, type Draft } from "@/components/bench/bench-state";
 import type { Question } from "@/lib/core/questions/types";
 import { NO_FACTS, type Step } from "@/lib/core/steps/types";
 
@@ -56,4 +56,50 @@ test("undo and redo go without limit, and an act that changes nothing is no act"
   const back = [..."12"].reduce((now) => bench(now, { do: "undo" }), state);
   expect(back.draft).toEqual(draft);
   expect([..."1234"].reduce((now) => bench(now, { do: "redo" }), back).draft.steps).toEqual([]);
+});
+
+test("what is done in one go, a drag or a visit to a field, is undone at once; the next go is another", () => {
+  const drag = (atMs: number, strand: string): BenchAct => ({ do: "set_end", stepId: "b", atMs, durationMs: 30_000, strand });
+  const state = after(drag(18_000, "drag 1"), drag(17_000, "drag 1"), drag(16_000, "drag 2"));
+  expect(state.undo).toHaveLength(2);
+  const once = bench(state, { do: "undo" });
+  expect(once.draft.steps[1]?.endMs).toBe(17_000);
+  expect(bench(once, { do: "undo" }).draft).toEqual(draft);
+  // After an undo even the same go begins anew.
+  expect(bench(once, drag(15_000, "drag 1")).undo).toHaveLength(2);
+});
+
+test("a new act after undoing forgets what could have been done again", () => {
+  const undone = after({ do: "remove_step", stepId: "b" }, { do: "undo" });
+  expect(undone.redo).toHaveLength(1);
+  expect(bench(undone, { do: "join", stepId: "a" }).redo).toEqual([]);
+});
+
+test("a split too near an edge, a join of the last and a removal of nothing change nothing", () => {
+  const acts: BenchAct[] = [
+    { do: "split", atMs: 100, newId: "n" },
+    { do: "split", atMs: 9900, newId: "n" },
+    { do: "split", atMs: 25_000, newId: "n" },
+    { do: "join", stepId: "b" },
+    { do: "remove_step", stepId: "none" },
+    { do: "undo" },
+    { do: "redo" },
+  ];
+  for (const act of acts) expect(after(act), act.do).toMatchObject({ draft, undo: [] });
+});
+
+test("a part without a name takes its neighbour's when they are joined; a name is never lost to it", () => {
+  const split = after({ do: "split", atMs: 5000, newId: "n" });
+  expect(split.draft.steps[1]?.title).toBe(NAMELESS);
+  expect(bench(split, { do: "join", stepId: "n" }).draft.steps[1]?.title).toBe("b");
+  expect(bench(split, { do: "join", stepId: "a" }).draft.steps[0]?.title).toBe("a");
+});
+
+test("a change of a step's words never moves its edges", () => {
+  const { steps } = after({ do: "change_step", step: { ...step("a", 1, 2), title: "renamed" } }).draft;
+  expect(steps[0]).toMatchObject({ title: "renamed", startMs: 0, endMs: 10_000 });
+});
+
+test("a moment between two steps belongs to the later one, and past the last to none", () => {
+  expect([0, 9999, 10_000, 20_000].map((ms) => stepAt(draft.steps, ms)?.id)).toEqual(["a", "a", "b", undefined]);
 });

@@ -6,6 +6,7 @@ const flag = z.enum(["0", "1"]).default("0").transform((value) => value === "1")
 const schema = z.object({
   DATABASE_URL: z.url({ protocol: /^postgres(ql)?$/ }),
   APP_URL: z.url({ protocol: /^https?$/ }),
+  NEXTAUTH_URL: z.url({ protocol: /^https?$/ }),
   NEXTAUTH_SECRET: z.string().min(32, "give at least 32 random characters"),
   S3_ENDPOINT: z.url({ protocol: /^https?$/ }),
   S3_PUBLIC_ENDPOINT: z.url({ protocol: /^https?$/ }),

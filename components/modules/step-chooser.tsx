@@ -26,9 +26,9 @@ export function StepChooser({ available, chosen, onChange }: StepChooserProps) {
           const step = byId.get(id);
           const name = step?.title ?? "a step that is gone";
           return (
-            <li key={id} className="flex items-center gap-2 border-b border-rule pl-3 last:border-b-0">
+            <li key={id} className="flex flex-wrap items-center gap-x-2 border-b border-rule pl-3 last:border-b-0">
               <span className="tabular w-6 font-mono text-ink2">{index + 1}</span>
-              <span className="min-w-0 flex-1 py-2">
+              <span className="min-w-0 flex-1 basis-52 py-2">
                 {name}
                 <span className="block text-sm text-ink2">
                   {step && `${step.recordingTitle} · ${step.questions} ${step.questions === 1 ? "question" : "questions"}`}

@@ -64,7 +64,7 @@ export function DataTable({ caption, columns, rows, sortedBy, nothingFound = "No
                   key={column.key}
                   className={`md:px-4 md:py-2.5 max-md:flex max-md:gap-2 ${index === 0 ? "max-md:text-[1.05rem] max-md:font-semibold" : ""} ${column.numeric ? "tabular md:text-right md:font-mono" : ""}`}
                 >
-                  {index > 0 && <span className="min-w-28 text-ink2 md:hidden">{column.label}</span>}
+                  {index > 0 && <span className="w-32 shrink-0 text-ink2 md:hidden">{column.label}</span>}
                   <span className="min-w-0">{row.cells[column.key]?.show}</span>
                 </td>
               ))}

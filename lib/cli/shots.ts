@@ -46,7 +46,7 @@ async function signIn(browser: Browser, base: string, email: string): Promise<Aw
   const context = await browser.newContext({ baseURL: base });
   const page = await context.newPage();
   await page.goto("/sign-in");
-  await page.getByLabel("E-mail").fill(email);
+  await page.getByLabel("E-mail address").fill(email);
   await page.getByLabel("Password", { exact: true }).fill(DEMO_PASSWORD);
   await page.getByRole("button", { name: "Sign in", exact: true }).click();
   await page.waitForURL((url) => !url.pathname.startsWith("/sign-in"));

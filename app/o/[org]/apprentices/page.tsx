@@ -26,7 +26,7 @@ export default async function ApprenticesPage({ params }: { params: Promise<{ or
       {plate.rows.length === 0 ? (
         <EmptyPlace title="Nobody trains here today">Apprentices come with a training agreement between this workshop and a college.</EmptyPlace>
       ) : (
-        <div className="grid gap-5">
+        <div className="grid grid-cols-[minmax(0,1fr)] gap-5">
           {runs.length > 0 && <Runs org={org} runs={runs} />}
           <Sheet>
             <Plate caption="Apprentices and tasks" columns={plateColumns(plate.tasks)} lines={plateLines(plate.rows)} tailLabel="Waits to be seen" />

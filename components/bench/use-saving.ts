@@ -4,7 +4,7 @@ import { useCallback, useEffect, useMemo, useRef, useState } from "react";
 import { api, ApiProblem } from "@/components/api/client";
 import type { Draft } from "@/components/bench/bench-state";
 import { keepable, type Unfinished } from "@/components/bench/keepable";
-import { dropCopy, readCopy, writeCopy, type LocalCopy } from "@/components/bench/local-copy";
+import { dropCopy, readCopy, writeCopy, type CopyPlace, type LocalCopy } from "@/components/bench/local-copy";
 import type { FieldProblem } from "@/lib/core/errors";
 import type { MarkingView } from "@/lib/schemas/marking";
 
@@ -17,7 +17,7 @@ export type SavingState =
   | { kind: "conflict"; theirs: MarkingView };
 
 /** Something of this device's that is not on the bench: it can be taken back. */
-export type SetAside = { copy: LocalCopy; why: "unsaved" | "replaced" };
+export type SetAside = { copy: LocalCopy; why: CopyPlace };
 
 /** Long enough to gather a few presses, short enough that hardly anything hangs on it. */
 const SETTLE_MS = 1200;
@@ -54,8 +54,8 @@ export function useSaving({ params, draft, first, load }: Saving) {
       kept.current = whole.draft;
       dealt.current = sending;
       setKeptNow(whole.draft);
-      if (whole.unfinished.length === 0 && latest.current === sending) dropCopy(recordingId);
-      else writeCopy(recordingId, { draft: latest.current, version: answer.version });
+      if (whole.unfinished.length === 0 && latest.current === sending) dropCopy(recordingId, "unsaved");
+      else writeCopy(recordingId, "unsaved", { draft: latest.current, version: answer.version });
       setState({ kind: "saved", at: Date.now() });
     } catch (error) {
       const status = error instanceof ApiProblem ? error.status : 0;
@@ -84,7 +84,7 @@ export function useSaving({ params, draft, first, load }: Saving) {
   useEffect(() => {
     latest.current = draft;
     if (draft === dealt.current) return;
-    writeCopy(recordingId, { draft, version: version.current });
+    writeCopy(recordingId, "unsaved", { draft, version: version.current });
     if (stopped.current) return;
     const timer = setTimeout(() => void send(), SETTLE_MS);
     return () => clearTimeout(timer);
@@ -98,15 +98,17 @@ export function useSaving({ params, draft, first, load }: Saving) {
     return () => {
       window.removeEventListener("online", now);
       document.removeEventListener("visibilitychange", now);
+      now();
     };
   }, [send]);
 
   // What this device had kept goes on by itself where nobody saved since; otherwise it waits to be taken or dropped.
   useEffect(() => {
     const timer = setTimeout(() => {
-      const copy = readCopy(recordingId);
-      if (copy?.version === first.version) load(copy.draft);
-      else if (copy) setAside({ copy, why: "unsaved" });
+      const [unsaved, replaced] = [readCopy(recordingId, "unsaved"), readCopy(recordingId, "replaced")];
+      if (unsaved?.version === first.version) load(unsaved.draft);
+      if (unsaved && unsaved.version !== first.version) setAside({ copy: unsaved, why: "unsaved" });
+      else if (replaced) setAside({ copy: replaced, why: "replaced" });
     });
     return () => clearTimeout(timer);
   }, [first.version, load, recordingId]);
@@ -119,20 +121,27 @@ export function useSaving({ params, draft, first, load }: Saving) {
       dealt.current = kept.current = latest.current = next;
       stopped.current = false;
       setKeptNow(next);
-      dropCopy(recordingId);
+      dropCopy(recordingId, "unsaved");
       load(next);
       setState({ kind: "saved", at: theirs.savedAt ? Date.parse(theirs.savedAt) : null });
     },
     [load, recordingId],
   );
+  const dropAside = () => {
+    if (aside) dropCopy(recordingId, aside.why);
+    setAside(null);
+  };
   return {
     state,
     unfinished,
     aside,
     version: () => version.current,
     settle,
+    /** Theirs comes on the bench; mine is laid aside on this device. */
     loadTheirs: (theirs: MarkingView) => {
-      setAside({ copy: { draft: latest.current, version: theirs.version }, why: "replaced" });
+      const copy = { draft: latest.current, version: theirs.version };
+      writeCopy(recordingId, "replaced", copy);
+      setAside({ copy, why: "replaced" });
       settle(theirs);
     },
     /** Mine goes on top of theirs. */
@@ -144,11 +153,8 @@ export function useSaving({ params, draft, first, load }: Saving) {
     },
     takeAside: () => {
       if (aside) load(aside.copy.draft);
-      setAside(null);
+      dropAside();
     },
-    dropAside: () => {
-      if (aside?.why === "unsaved") dropCopy(recordingId);
-      setAside(null);
-    },
+    dropAside,
   };
 }

@@ -125,7 +125,7 @@ export function Bench({ params, title, back, film }: BenchProps) {
   );
 
   return (
-    <main id="main" tabIndex={-1} className="isolate grid outline-none max-sm:[&_kbd]:hidden lg:grid-cols-[minmax(0,1fr)_26rem]">
+    <main id="main" tabIndex={-1} className="isolate grid outline-none max-sm:[&_button_kbd]:hidden lg:grid-cols-[minmax(0,1fr)_26rem]">
       <div className="min-w-0" onMouseDown={keepFocusOffButtons}>
         <div className="flex flex-wrap items-center justify-between gap-x-5 px-3 py-1 sm:px-4">
           <h1 className="min-w-0 text-[1.35rem] leading-tight">

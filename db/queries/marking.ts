@@ -1,6 +1,6 @@
 import type { Knex } from "knex";
 import type { Db } from "@/db/client";
-import type { Question } from "@/lib/core/questions/types";
+import type { Question, QuestionBody } from "@/lib/core/questions/types";
 import type { Step } from "@/lib/core/steps/types";
 
 /** A recording as far as marking out goes. `durationMs` is null until the film was measured. */
@@ -43,17 +43,31 @@ export async function listQuestions(db: Db, recordingId: string): Promise<Questi
     .select("id", "step_id", "at_ms", "prompt", "explanation", "look_again_ms", "safety_critical", "body")
     .where({ recording_id: recordingId })
     .orderBy(["at_ms", "id"]);
-  return rows.map((row) => ({
-    id: row.id,
-    stepId: row.step_id,
-    atMs: row.at_ms,
-    prompt: row.prompt,
-    explanation: row.explanation,
-    lookAgainMs: row.look_again_ms,
-    safetyCritical: row.safety_critical,
-    body: row.body,
-  }));
+  return rows.map(toQuestion);
 }
+
+type QuestionRow = {
+  id: string;
+  step_id: string;
+  at_ms: number;
+  prompt: string;
+  explanation: string;
+  look_again_ms: number;
+  safety_critical: boolean;
+  body: QuestionBody;
+};
+
+/** A question's row as the product knows it. */
+export const toQuestion = (row: QuestionRow): Question => ({
+  id: row.id,
+  stepId: row.step_id,
+  atMs: row.at_ms,
+  prompt: row.prompt,
+  explanation: row.explanation,
+  lookAgainMs: row.look_again_ms,
+  safetyCritical: row.safety_critical,
+  body: row.body,
+});
 
 /** Which of these ids of steps or questions belong to other recordings already. */
 export async function listTakenIds(db: Db, recordingId: string, ids: readonly string[]): Promise<Set<string>> {

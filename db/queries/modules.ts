@@ -1,5 +1,6 @@
 import type { Knex } from "knex";
 import type { Db } from "@/db/client";
+import { toQuestion } from "@/db/queries/marking";
 import type { ModuleContent, ModuleStep } from "@/lib/core/modules/types";
 import type { Question } from "@/lib/core/questions/types";
 
@@ -105,16 +106,7 @@ export async function listDraftQuestions(db: Db, moduleId: string): Promise<Ques
     .select("q.id", "q.step_id", "q.at_ms", "q.prompt", "q.explanation", "q.look_again_ms", "q.safety_critical", "q.body")
     .where("ms.module_id", moduleId)
     .orderBy(["ms.position", "q.at_ms", "q.id"]);
-  return rows.map((row) => ({
-    id: row.id,
-    stepId: row.step_id,
-    atMs: row.at_ms,
-    prompt: row.prompt,
-    explanation: row.explanation,
-    lookAgainMs: row.look_again_ms,
-    safetyCritical: row.safety_critical,
-    body: row.body,
-  }));
+  return rows.map(toQuestion);
 }
 
 export async function listDraftTaskIds(db: Db, moduleId: string): Promise<string[]> {

@@ -1,19 +1,8 @@
 import type { Db } from "@/db/client";
-import type { Level, Outcome } from "@/lib/core/tasks/types";
+import type { SignedDecision } from "@/lib/core/standing/standing-of";
 
-/** One signed decision on a task, with what happened to it since. Days are yyyy-mm-dd in UTC. */
-export type SignOffFact = {
-  apprenticeId: string;
-  taskId: string;
-  signOffId: string;
-  outcome: Outcome;
-  level: Level | null;
-  signedOn: string;
-  currentUntil: string | null;
-  withdrawn: boolean;
-  /** A later revision of the task, or of a module that opens it, said that the work changed. */
-  workChangedSince: boolean;
-};
+/** One signed decision on a task, with what happened to it since. */
+export type SignOffFact = SignedDecision & { apprenticeId: string; taskId: string; signOffId: string };
 
 /** What else is known of a person and a task. */
 export type ProgressFact = {

@@ -1,12 +1,14 @@
 import type { Held, Next, Standing } from "@/lib/core/standing/types";
 import type { Level, Outcome } from "@/lib/core/tasks/types";
 
+/** One signed decision, with what happened to it since. Days are yyyy-mm-dd. */
 export type SignedDecision = {
   outcome: Outcome;
   level: Level | null;
   signedOn: string;
   currentUntil: string | null;
   withdrawn: boolean;
+  /** A later revision of the task, or of a module that opens it, said that the work changed. */
   workChangedSince: boolean;
 };
 

@@ -4,6 +4,7 @@ import { join } from "node:path";
 import { chromium, type Page } from "@playwright/test";
 import { frame, HEIGHT, WIDTH } from "@/lib/cli/film/frame";
 import type { PlacedScene } from "@/lib/cli/film/timeline";
+import { findProgram } from "../programs.mjs";
 
 /** Drawn scenes need no more. */
 export const FRAMES_PER_SECOND = 8;
@@ -48,7 +49,7 @@ const fontFaces = (): string =>
 
 /** Turns SVG into PNG files with the browser that the tests use. @param fileOf where picture number n goes */
 export async function paint(pictures: readonly Drawn[], fileOf: (index: number) => string): Promise<void> {
-  const browser = await chromium.launch({ executablePath: "/usr/bin/chromium", args: ["--no-sandbox", "--disable-gpu", "--disable-background-networking"] });
+  const browser = await chromium.launch({ executablePath: findProgram("chromium") ?? "chromium", args: ["--no-sandbox", "--disable-gpu", "--disable-background-networking"] });
   try {
     const page = await browser.newPage({ viewport: { width: WIDTH, height: HEIGHT } });
     await page.setContent(`<style>${fontFaces()}body{margin:0}</style><div id="frame"></div>`);

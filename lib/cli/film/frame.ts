@@ -3,7 +3,7 @@ import { glide, type Since } from "@/lib/cli/film/moment";
 import { boltHead } from "@/lib/cli/film/parts/bolt-head";
 import { sign } from "@/lib/cli/film/parts/sign";
 import { PICTURES } from "@/lib/cli/film/pictures";
-import { CAUTION, CHALK, DEEP, element, FIELD, group, HAIRLINE, INK, line, lines, PAINT, rect, SOFT, stroke, text, wrap } from "@/lib/cli/film/svg";
+import { balance, CAUTION, CHALK, DEEP, element, FIELD, group, HAIRLINE, INK, line, lines, PAINT, rect, SOFT, stroke, text } from "@/lib/cli/film/svg";
 
 export const WIDTH = 1280;
 export const HEIGHT = 720;
@@ -65,7 +65,8 @@ function plateColumn(plates: { plate: Plate; ms: number }[]): string {
 
 function valuePlate({ label, value, unit, note }: Extract<Plate, { kind: "value" }>): { height: number; body: string } {
   const height = note === undefined ? 148 : 184;
-  const size = value.length > 7 ? 54 : 84;
+  // A letter of the reading face is 0.6 of its size wide; figures and unit share the plate's width.
+  const size = Math.min(84, Math.floor((314 - unit.length * 26.4) / (value.length * 0.6)));
   const figures = element(
     "text",
     { x: 24, y: 122, fill: INK, "font-size": size, "font-family": "'Atkinson Hyperlegible Mono Variable'", "font-weight": 600 },
@@ -78,7 +79,7 @@ function valuePlate({ label, value, unit, note }: Extract<Plate, { kind: "value"
 }
 
 function notePlate({ text: words }: Extract<Plate, { kind: "note" }>): { height: number; body: string } {
-  const broken = wrap(words, 23);
+  const broken = balance(words, 21);
   const height = 34 + broken.length * 42;
   return {
     height,
@@ -90,8 +91,8 @@ function notePlate({ text: words }: Extract<Plate, { kind: "note" }>): { height:
 function cautionPage({ scene }: FrameOf): string {
   const caution = scene.caution;
   if (!caution) return "";
-  const hazard = wrap(caution.hazard, 36);
-  const todo = wrap(caution.instruction.replace(/ The maker's data and local rules come first\.$/, ""), 38);
+  const hazard = balance(caution.hazard, 36);
+  const todo = balance(caution.instruction.replace(/ The maker's data and local rules come first\.$/, ""), 38);
   const top = 236;
   const middle = top + hazard.length * 62 + 14;
   return (

@@ -10,9 +10,12 @@ import { SAMPLE_RATE, speak, wav } from "@/lib/cli/film/speech";
 import { captionsOf, layOut, type Timeline } from "@/lib/cli/film/timeline";
 import { escapeCueText } from "@/lib/core/webvtt/cue-text";
 import { formatTimestamp } from "@/lib/core/webvtt/timestamps";
+import { findProgram } from "../programs.mjs";
 
-// Makes the demo's films anew: speaks their lines, lays them out in time, draws every frame and encodes. Needs espeak-ng, ffmpeg and
-// chromium (apt-get install espeak-ng ffmpeg chromium). `npm run film -- KEY` makes one. The made files are shipped, so nobody else needs to wait for this.
+const NEEDS = ["espeak-ng", "ffmpeg", "ffprobe", "chromium"];
+
+// Makes the demo's films anew: speaks their lines, lays them out in time, draws every frame and encodes. `npm run film -- KEY` makes one.
+// The made files are shipped, so nobody else needs to wait for this.
 async function makeFilm(script: FilmScript): Promise<void> {
   const media = join(process.cwd(), "db/seeds/demo/films", script.key, "media");
   const folder = mkdtempSync(join(tmpdir(), "film-"));
@@ -60,7 +63,11 @@ function captions({ timings }: Timeline): string {
 }
 
 async function main(): Promise<void> {
+  const missing = NEEDS.filter((name) => !findProgram(name));
+  if (missing.length > 0) throw new Error(`Missing on this machine: ${missing.join(", ")}. On Debian: apt-get install espeak-ng ffmpeg chromium`);
   const wanted = process.argv.slice(2);
+  const unknown = wanted.filter((key) => ![discs, belt].some((script) => script.key === key));
+  if (unknown.length > 0) throw new Error(`There is no film “${unknown.join(", ")}”. The films: ${discs.key}, ${belt.key}.`);
   for (const script of [discs, belt]) if (wanted.length === 0 || wanted.includes(script.key)) await makeFilm(script);
 }
 

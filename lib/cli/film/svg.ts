@@ -90,6 +90,14 @@ export function wrap(words: string, most: number): string[] {
   return lines;
 }
 
+/** As `wrap`, but with lines of about the same length, so that no word is left alone. */
+export function balance(words: string, most: number): string[] {
+  const count = wrap(words, most).length;
+  let width = most;
+  while (width > 8 && wrap(words, width - 1).length === count) width -= 1;
+  return wrap(words, width);
+}
+
 /** Several lines of text, one under the other. */
 export const lines = (x: number, y: number, words: readonly string[], leading: number, style: TextStyle = {}): string =>
   words.map((entry, index) => text(x, y + index * leading, entry, style)).join("");

@@ -1,19 +1,19 @@
-import { CHALK, circle, group, INK, polar, RUBBER, STEEL, STEEL_DARK, STEEL_LIGHT, stroke, tenth, text } from "@/lib/cli/film/svg";
+import { CHALK, circle, group, INK, path, polar, STEEL, STEEL_DARK, STEEL_LIGHT, stroke, tenth, text } from "@/lib/cli/film/svg";
 
 /** A pulley on the belt's way. `side` 1: the belt goes round it clockwise, ribs inside; −1: its back runs on a smooth one. */
 export type Pulley = { name: string; x: number; y: number; r: number; side: 1 | -1; label: [number, number] };
 
 export const PULLEYS: Pulley[] = [
   { name: "Crank", x: 330, y: 396, r: 74, side: 1, label: [330, 504] },
-  { name: "Tensioner", x: 190, y: 290, r: 36, side: -1, label: [96, 352] },
+  { name: "Tensioner", x: 190, y: 290, r: 36, side: -1, label: [84, 466] },
   { name: "Alternator", x: 150, y: 120, r: 46, side: 1, label: [150, 52] },
   { name: "Idler", x: 320, y: 190, r: 34, side: -1, label: [320, 136] },
   { name: "Water pump", x: 480, y: 122, r: 58, side: 1, label: [480, 40] },
-  { name: "Compressor", x: 606, y: 330, r: 60, side: 1, label: [606, 430] },
+  { name: "Compressor", x: 606, y: 330, r: 60, side: 1, label: [684, 436] },
 ];
 
 /** Straight run between two pulleys: where the belt leaves the first and meets the second. */
-function run(from: Pulley, to: Pulley): [number, number, number, number] {
+export function run(from: Pulley, to: Pulley): [number, number, number, number] {
   const [dx, dy] = [to.x - from.x, to.y - from.y];
   const length = Math.hypot(dx, dy);
   const [a, b] = [from.side * from.r, to.side * to.r];
@@ -55,12 +55,28 @@ export function pulleyFace({ x, y, r, side }: Pulley, turn = 0): string {
 
 type Routing = { pulleys?: Pulley[]; belt?: boolean; drawn?: number; labels?: number; turn?: number; colour?: string };
 
+/** A belt's rubber, light enough to be seen before a dark engine. */
+export const BELT_RUBBER = "#54645E";
+
+/** A belt along a way, with its ribs hinted at. */
+export const strap = (way: string): string => stroke(way, INK, 16) + stroke(way, BELT_RUBBER, 11) + stroke(way, "#A9B7B0", 2, { "stroke-dasharray": "10 8" });
+
+/** Where the tensioner's arm turns, and where its pin goes. */
+export const PIVOT: [number, number] = [104, 384];
+
+function tensionerArm({ x, y }: Pulley): string {
+  const [px, py] = PIVOT;
+  const [dx, dy] = [x - px, y - py];
+  const length = Math.hypot(dx, dy);
+  return group({ x: px, y: py, turn: (Math.atan2(dy, dx) * 180) / Math.PI }, path(`M0 -30 L${tenth(length)} -18 L${tenth(length)} 18 L0 30 Z`, STEEL_DARK)) + circle(px, py, 40, STEEL) + circle(px, py, 12, INK);
+}
+
 /** All pulleys with their belt. `drawn` 0–1: how much of the belt's way is drawn as a line; `labels`: how many pulleys are named. */
 export function routing({ pulleys = PULLEYS, belt = true, drawn, labels = 0, turn = 0, colour = CHALK }: Routing): string {
   const way = beltPath(pulleys, 5);
   const faces = pulleys.map((pulley) => pulleyFace(pulley, (turn * 74 * pulley.side) / pulley.r)).join("");
-  const strap = belt ? stroke(way, INK, 15) + stroke(way, RUBBER, 10) + stroke(way, "#4B5956", 2, { "stroke-dasharray": "10 8" }) : "";
+  const arm = pulleys.filter((pulley) => pulley.name === "Tensioner").map(tensionerArm).join("");
   const trace = drawn === undefined ? "" : stroke(way, colour, 6, { pathLength: 100, "stroke-dasharray": `${tenth(drawn * 100)} 200`, opacity: drawn > 0 ? undefined : "0" });
   const names = pulleys.slice(0, labels).map((pulley) => text(...pulley.label, pulley.name, { anchor: "middle", size: 32 }));
-  return faces + strap + trace + names.join("");
+  return arm + faces + (belt ? strap(way) : "") + trace + names.join("");
 }

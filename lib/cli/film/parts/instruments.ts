@@ -71,7 +71,7 @@ export function torqueWrench(x: number, y: number, set: string, turn = 0, name =
 export function handMeter(x: number, y: number, figures: string, unit: string, name: string, leads: [number, number][] = []): string {
   const wires = leads.map(([toX, toY], index) => {
     const fromX = x + 80 + index * 80;
-    return stroke(`M${fromX} ${y + 300} C${fromX} ${y + 380} ${toX} ${toY + 100} ${toX} ${toY}`, index === 0 ? INK : PAINT, 6);
+    return stroke(`M${fromX} ${y + 300} C${fromX} ${y + 400} ${toX} ${toY - 56} ${toX} ${toY}`, index === 0 ? STEEL : PAINT, 6);
   });
   return (
     wires.join("") +

@@ -19,7 +19,9 @@ const PICTOGRAMS: Record<string, () => string> = {
   W024: () =>
     rect(-46, -22, 92, 13, BLACK, { stroke: "none" }) +
     rect(-52, 46, 104, 12, BLACK, { stroke: "none" }) +
-    path("M46 0 L20 2 L-26 2 L-26 12 L-40 12 L-40 22 L-46 22 L-46 30 L-30 32 L14 36 L46 34 Z", BLACK, { stroke: "none" }),
+    rect(8, -5, 46, 42, BLACK, { stroke: "none", rx: 10 }) +
+    [-30, -42, -40, -28].map((x, index) => rect(x, -5 + index * 10.5, 44 - x - 10, 8, BLACK, { stroke: "none", rx: 4 })).join("") +
+    stroke("M34 36 L4 41", BLACK, 8),
   M004: () =>
     path(HEAD, WHITE, { stroke: "none" }) + path("M-6 -26 L34 -26 L34 -6 L4 -6 C-4 -6 -6 -14 -6 -26 Z", BLUE, { stroke: WHITE, "stroke-width": 4 }) + stroke("M-6 -18 L-30 -22", BLUE, 6),
   M016: () => path(HEAD, WHITE, { stroke: "none" }) + path("M8 4 L44 2 L40 30 L10 34 C4 24 4 14 8 4 Z", BLUE, { stroke: WHITE, "stroke-width": 4 }) + stroke("M8 8 L-30 -8 M10 28 L-32 26", BLUE, 5),

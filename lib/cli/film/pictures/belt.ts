@@ -1,6 +1,7 @@
 import { between, glide, stage, type Picture } from "@/lib/cli/film/moment";
-import { arrow, callout, dimension } from "@/lib/cli/film/parts/annotations";
-import { beltPath, PULLEYS, pulleyFace, routing, type Pulley } from "@/lib/cli/film/parts/belt";
+import { arrow, dimension } from "@/lib/cli/film/parts/annotations";
+import { BELT_RUBBER, beltPath, PIVOT, PULLEYS, pulleyFace, routing, run, strap, type Pulley } from "@/lib/cli/film/parts/belt";
+import { boltHead } from "@/lib/cli/film/parts/bolt-head";
 import { handMeter, torqueWrench } from "@/lib/cli/film/parts/instruments";
 import { recap } from "@/lib/cli/film/pictures/discs-fit";
 import { CHALK, circle, group, INK, line, PAINT, path, polar, rect, RUBBER, SOFT, STEEL, STEEL_DARK, STEEL_LIGHT, stroke, tenth, text } from "@/lib/cli/film/svg";
@@ -15,8 +16,8 @@ const concern: Picture = (since) => {
   const squeal = since(1) > 300 && since(1) < 2600;
   const flicker = since(1) > 2200 && Math.floor(since(1) / 300) % 2 === 0;
   return (
-    group({ x: 10, y: 30, scale: 0.86 }, routing({})) +
-    (squeal ? stroke("M226 190 l34 -20 M236 214 l40 -4 M222 168 l20 -34", PAINT, 8) : "") +
+    group({ x: 0, y: 90, scale: 0.74 }, routing({})) +
+    (squeal ? stroke("M178 150 l30 -18 M186 176 l36 -2 M166 128 l18 -30", PAINT, 8) : "") +
     group(
       { x: 640, y: 150 },
       rect(-96, -100, 192, 160, INK, { rx: 10 }),
@@ -24,7 +25,7 @@ const concern: Picture = (since) => {
       text(-26, 12, "−", { size: 44, anchor: "middle", fill: INK }),
       text(28, 12, "+", { size: 44, anchor: "middle", fill: INK }),
     ) +
-    group({ opacity: glide(since(1), 4300, 500) }, text(640, 330, "P0562", { size: 64, anchor: "middle", font: "reading", fill: PAINT }))
+    group({ opacity: glide(since(1), 4300, 500) }, text(640, 320, "P0562", { size: 68, anchor: "middle", font: "reading", fill: PAINT }))
   );
 };
 
@@ -35,17 +36,17 @@ const charge =
   (before: string, reading: string, good: boolean): Picture =>
   (since) => {
     const shown = since(0) > 1400;
-    const y = (volts: number): number => 440 - (volts - 12.6) * 150;
+    const y = (volts: number): number => 240 - (volts - 12.6) * 80;
     const at = Number(reading);
     return (
-      battery(20, 280) +
-      handMeter(70, 10, shown ? reading : before, "V", "MM-1", [[92, 262], [278, 262]]) +
+      battery(300, 316) +
+      handMeter(20, 24, shown ? reading : before, "V", "MM-1", [[372, 286], [558, 286]]) +
       rect(600, y(14.8), 60, y(13.8) - y(14.8), STEEL_LIGHT) +
-      line(630, 96, 630, 470, CHALK, 4) +
+      line(630, 56, 630, 252, CHALK, 4) +
       text(680, y(14.8) + 12, "14.8", { size: 40, font: "reading" }) +
       text(680, y(13.8) + 12, "13.8", { size: 40, font: "reading" }) +
       group({ opacity: glide(since(0), 1400, 500) }, arrow(520, y(at), 596, y(at)), text(506, y(at) + 14, reading, { size: 44, anchor: "end", font: "reading", fill: good ? CHALK : PAINT })) +
-      text(630, 70, "Charging, V", { anchor: "middle", size: 36 })
+      text(630, 290, "Charging, V", { anchor: "middle", size: 36 })
     );
   };
 
@@ -63,7 +64,7 @@ const beltFaults: Picture = (since) => {
   return (
     (shown > 0 ? strip(70, cracks + dimension(124, 266, -10, ""), "Cracks") + text(225, 40, "25 mm", { anchor: "middle", size: 34, font: "reading" }) : "") +
     (shown > 1 ? strip(230, path("M120 30 C180 -10 300 10 340 44 C380 90 240 92 180 78 C130 70 100 50 120 30 Z", "#8A6A2E", { opacity: "0.85" }), "Oil") : "") +
-    (shown > 2 ? strip(390, [0, 1, 2, 3, 4].map((index) => line(20 + index * 110, 88, 90 + index * 110, 8, CHALK, 7, { opacity: "0.55" })).join(""), "Glaze", "#4E5C59") : "")
+    (shown > 2 ? strip(390, [0, 1, 2, 3].map((index) => line(30 + index * 124, 88, 100 + index * 124, 8, CHALK, 7, { opacity: "0.55" })).join(""), "Glaze", "#4E5C59") : "")
   );
 };
 
@@ -73,12 +74,12 @@ const keyBox: Picture = (since) => {
   const key = (x: number, y: number, turn: number): string =>
     group({ x, y, turn }, circle(0, 0, 44, STEEL_DARK), circle(-14, 0, 12, INK), rect(40, -12, 110, 24, STEEL_LIGHT), path("M96 12 l0 16 l14 0 l0 -16 M124 12 l0 22 l14 0 l0 -22", STEEL_LIGHT));
   return (
-    rect(400, 130, 300, 300, STEEL_DARK) +
-    rect(420, 150, 260, 260, INK) +
-    key(between(90, 500, inside), between(150, 240, inside), 20 * inside) +
-    group({ x: between(70, 480, inside), y: between(330, 310, inside) }, rect(0, 0, 130, 70, RUBBER, { rx: 24 }), circle(36, 34, 12, STEEL), circle(78, 34, 12, STEEL)) +
-    group({ x: 400, y: 130, opacity: shut }, rect(0, 0, 300, 300, STEEL), rect(18, 18, 264, 264, "none", { "stroke-width": 2 }), circle(250, 150, 26, STEEL_DARK), text(130, 160, "Keys", { anchor: "middle", size: 54, fill: INK })) +
-    (since(0) > 3200 ? group({ x: 650, y: 300 }, stroke("M-34 0 V-40 a34 34 0 0 1 68 0 V0", CHALK, 14), rect(-56, 0, 112, 90, PAINT), circle(0, 36, 12, INK), rect(-5, 40, 10, 30, INK)) : "")
+    rect(240, 100, 300, 300, STEEL_DARK) +
+    rect(260, 120, 260, 260, INK) +
+    key(between(70, 330, inside), between(120, 200, inside), 20 * inside) +
+    group({ x: between(40, 310, inside), y: between(330, 280, inside) }, rect(0, 0, 130, 70, RUBBER, { rx: 24 }), circle(36, 34, 12, STEEL), circle(78, 34, 12, STEEL)) +
+    group({ x: 240, y: 100, opacity: shut }, rect(0, 0, 300, 300, STEEL), rect(18, 18, 264, 264, "none", { "stroke-width": 2 }), circle(250, 150, 26, STEEL_DARK), text(130, 160, "Keys", { anchor: "middle", size: 54, fill: INK })) +
+    (since(0) > 3200 ? group({ x: 500, y: 300 }, stroke("M-34 0 V-40 a34 34 0 0 1 68 0 V0", CHALK, 14), rect(-56, 0, 112, 90, PAINT), circle(0, 36, 12, INK), rect(-5, 40, 10, 30, INK)) : "")
   );
 };
 
@@ -91,7 +92,10 @@ const routingDrawn: Picture = (since) => {
   );
 };
 
-const bar = (x: number, y: number, turn: number): string => group({ x, y, turn }, rect(0, -11, 330, 22, STEEL_LIGHT), circle(0, 0, 22, STEEL_DARK), rect(250, -16, 90, 32, RUBBER, { rx: 14 }));
+const bar = (x: number, y: number, turn: number): string => group({ x, y, turn }, rect(0, -11, 200, 22, STEEL_LIGHT), circle(0, 0, 20, STEEL_DARK), rect(150, -15, 76, 30, STEEL_DARK, { rx: 14 }));
+
+/** The tensioner's pin with its ring, its point at (x, y). */
+const lockPin = (x: number, y: number): string => group({ x, y }, rect(-66, -7, 84, 14, PAINT), circle(-78, 0, 18, "none", { stroke: PAINT, "stroke-width": 8 }));
 
 const relieve: Picture = (since) => {
   const part = glide(since(0), 900, 2000) - 0.12 * glide(since(1), 3000, 700);
@@ -100,9 +104,9 @@ const relieve: Picture = (since) => {
   const { x, y } = pulleys[1] as Pulley;
   return (
     routing({ pulleys }) +
-    bar(x, y, 40 + 34 * part) +
-    (part > 0.05 && part < 0.95 && pinned === 0 ? stroke("M300 470 q-40 50 -110 30", PAINT, 7) : "") +
-    (pinned > 0 ? group({ x: between(40, x - 20, pinned), y: y - 78 }, rect(-90, -7, 110, 14, PAINT), circle(-100, 0, 22, "none", { stroke: PAINT, "stroke-width": 8 })) : "") +
+    bar(x, y, 64 + 34 * part) +
+    (part > 0.05 && part < 0.95 && pinned === 0 ? arrow(300, 500, 216, 512) : "") +
+    (pinned > 0 ? lockPin(between(-20, PIVOT[0], pinned), PIVOT[1]) : "") +
     text(20, 60, pinned > 0.95 ? "Pinned" : part > 0.9 ? "Slack" : "", { size: 48, fill: PAINT })
   );
 };
@@ -111,8 +115,8 @@ const beltOff: Picture = (since) => {
   const off = glide(since(0), 500, 1600);
   const loop = (x: number, ribs: string): string => stroke(`M${x} 120 a52 52 0 0 1 104 0 V400 a52 52 0 0 1 -104 0 Z`, INK, 26) + stroke(`M${x} 120 a52 52 0 0 1 104 0 V400 a52 52 0 0 1 -104 0 Z`, ribs, 19);
   return (
-    group({ x: -40, y: 60, scale: 0.74 }, routing({ pulleys: relieved(0.88), belt: false }), group({ x: off * 60, y: -off * 26, opacity: 1 - off }, stroke(beltPath(relieved(0.88), 5), RUBBER, 13))) +
-    group({ opacity: glide(since(0), 2400, 600) }, loop(500, RUBBER), loop(650, STEEL_DARK), text(552, 505, "Old", { anchor: "middle", size: 40 }), text(702, 505, "New", { anchor: "middle", size: 40 }), line(480, 66, 776, 66, PAINT, 3, { "stroke-dasharray": "10 8" }), line(480, 454, 776, 454, PAINT, 3, { "stroke-dasharray": "10 8" }))
+    group({ x: -40, y: 60, scale: 0.74 }, routing({ pulleys: relieved(0.88), belt: false }), group({ x: off * 60, y: -off * 26, opacity: 1 - off }, strap(beltPath(relieved(0.88), 5)))) +
+    group({ opacity: glide(since(0), 2400, 600) }, loop(510, BELT_RUBBER), loop(650, STEEL_LIGHT), text(562, 505, "Old", { anchor: "middle", size: 40 }), text(702, 505, "New", { anchor: "middle", size: 40 }), line(480, 66, 776, 66, PAINT, 3, { "stroke-dasharray": "10 8" }), line(480, 454, 776, 454, PAINT, 3, { "stroke-dasharray": "10 8" }))
   );
 };
 
@@ -133,21 +137,26 @@ const alignment: Picture = (since) => {
   const side = (x: number, y: number, height: number): string => rect(x, y - height / 2, 70, height, STEEL) + Array.from({ length: 5 }, (_, index) => line(x + 14 + index * 11, y - height / 2 + 8, x + 14 + index * 11, y + height / 2 - 8, INK, 3)).join("") + rect(x + 70, y - 22, 60, 44, STEEL_DARK);
   return (
     side(420, 110, 130) +
-    side(414, 270, 90) +
+    side(432, 270, 90) +
     side(420, 424, 150) +
     rect(between(120, 386, laid), 20, 34, 490, STEEL_LIGHT) +
-    callout(190, 120, 386, 90, "Straight edge", "middle") +
-    group({ opacity: shown }, arrow(200, 270, 384, 270, PAINT), arrow(560, 210, 436, 250, PAINT, 4), text(60, 284, "0.4 mm", { size: 48, font: "reading", fill: PAINT }), text(570, 210, "gap", { size: 38 }))
+    text(190, 100, "Straight edge", { anchor: "middle", size: 38 }) +
+    line(290, 90, 382, 90, CHALK, 3) +
+    group({ opacity: shown }, arrow(574, 196, 430, 250, PAINT, 5), text(586, 202, "0.4 mm", { size: 48, font: "reading", fill: PAINT }))
   );
 };
 
+/** A pull on the wrench, and the small give of its click. */
+const turnOf = (ms: number, fromMs: number): number => 14 - 20 * glide(ms, fromMs, 1200) + 3 * glide(ms, fromMs + 1250, 120);
+
 const tensionerTorque: Picture = (since) => {
-  const turn = -20 * glide(since(0), 2200, 1400) + 3 * glide(since(0), 3650, 120);
   const second = since(0) > 5200;
   return (
-    group({ x: 230, y: 300 }, path("M-40 -40 L150 -150 L190 -90 L40 60 Z", STEEL_DARK), circle(150, -110, 62, STEEL_LIGHT), circle(150, -110, 20, STEEL_DARK), circle(0, 0, 84, STEEL), circle(0, 0, 36, CHALK)) +
-    (second ? group({ x: 590, y: 400 }, pulleyFace({ ...IDLER, x: 0, y: 0, r: 84 })) + torqueWrench(590, 400, "40", 196, "") : torqueWrench(230, 300, "45", 12 + turn, "TW-2")) +
-    text(230, 446, second ? "45 N·m" : "Peg in its hole", { anchor: "middle", size: 40, fill: second ? PAINT : CHALK })
+    group({ x: 190, y: 220 }, path("M-40 -40 L126 -140 L160 -84 L40 60 Z", STEEL_DARK), circle(130, -100, 60, STEEL_LIGHT), circle(130, -100, 20, STEEL_DARK), circle(0, 0, 84, STEEL), circle(-52, 30, 11, PAINT), boltHead(0, 0, 26, { fill: second ? PAINT : CHALK })) +
+    group({ x: 190, y: 424 }, pulleyFace({ ...IDLER, x: 0, y: 0, r: 76 }), boltHead(0, 0, 22, { fill: since(0) > 6900 ? PAINT : CHALK })) +
+    (second ? torqueWrench(190, 424, "40", turnOf(since(0), 5600)) : torqueWrench(190, 220, "45", turnOf(since(0), 2200))) +
+    line(128, 252, 90, 300, PAINT, 3) +
+    text(20, 334, "Peg", { size: 38, fill: PAINT })
   );
 };
 
@@ -158,7 +167,8 @@ const beltOn: Picture = (since) => {
   const { x, y } = pulleys[1] as Pulley;
   return (
     routing({ pulleys, belt: up > 0 || on >= 1, ...(on < 1 ? { drawn: on, colour: CHALK } : {}) }) +
-    (since(0) > 4200 ? bar(x, y, 40 + 30 * (1 - up)) : group({ x: x - 20, y: y - 78 }, rect(-90, -7, 110, 14, PAINT), circle(-100, 0, 22, "none", { stroke: PAINT, "stroke-width": 8 }))) +
+    (since(0) > 4200 ? bar(x, y, 64 + 34 * (1 - up)) : "") +
+    group({ opacity: 1 - glide(since(0), 4700, 400) }, lockPin(between(PIVOT[0], 86, glide(since(0), 4600, 500)), PIVOT[1])) +
     text(IDLER.x, 136, "Idler last", { anchor: "middle", size: 34 })
   );
 };
@@ -168,7 +178,7 @@ const section = (x: number, shift: number, name: string, wrong: boolean): string
   return group(
     { x, y: 150 },
     path(`M-14 20 l14 0 ${grooves} l14 0 L278 200 L-14 200 Z`, STEEL),
-    path(`M${-2 + shift} -34 L${266 + shift} -34 L${266 + shift} 14 ${Array.from({ length: 6 }, () => "l-22 54 l-22 -54").join(" ")} Z`, wrong ? "#5A3A30" : RUBBER),
+    path(`M${-2 + shift} -34 L${266 + shift} -34 L${266 + shift} 14 ${Array.from({ length: 6 }, () => "l-22 54 l-22 -54").join(" ")} Z`, wrong ? "#A65A42" : BELT_RUBBER),
     text(132, 270, name, { anchor: "middle", size: 42, fill: wrong ? PAINT : CHALK }),
     wrong ? stroke("M40 -96 L224 230", PAINT, 14) : "",
   );
@@ -185,12 +195,19 @@ const secondTurn: Picture = (since) => {
 const frequency: Picture = (since) => {
   const pluck = since(0) > 2600 && since(0) < 5200 ? Math.sin(since(0) / 45) * 18 * (1 - (since(0) - 2600) / 2600) : 0;
   const shown = since(0) > 4300;
+  const low: Pulley = { ...IDLER, x: 110, y: 340, r: 80, side: 1 };
+  const high: Pulley = { ...IDLER, x: 380, y: 130, r: 62, side: 1 };
+  const [x1, y1, x2, y2] = run(low, high);
+  const [bx1, by1, bx2, by2] = run(high, low);
   return (
-    group({ x: 20, y: 40 }, circle(60, 330, 88, STEEL), circle(60, 330, 24, STEEL_DARK), circle(420, 120, 66, STEEL), circle(420, 120, 20, STEEL_DARK), stroke(`M16 248 Q${tenth(200 + pluck)} ${tenth(150 + pluck * 2)} 384 58`, INK, 18), stroke(`M16 248 Q${tenth(200 + pluck)} ${tenth(150 + pluck * 2)} 384 58`, RUBBER, 12)) +
+    pulleyFace(low) +
+    pulleyFace(high) +
+    strap(`M${tenth(bx1)} ${tenth(by1)} L${tenth(bx2)} ${tenth(by2)}`) +
+    strap(`M${tenth(x1)} ${tenth(y1)} Q${tenth((x1 + x2) / 2 + pluck)} ${tenth((y1 + y2) / 2 + pluck)} ${tenth(x2)} ${tenth(y2)}`) +
     handMeter(500, 150, shown ? "128" : "---", "Hz", "Belt frequency") +
-    stroke("M620 150 C600 60 420 60 300 150", INK, 6) +
-    rect(270, 140, 40, 26, STEEL) +
-    group({ x: 170, y: 440 }, rect(-90, -30, 260, 60, STEEL_DARK), rect(0, -30, 80, 60, CHALK), path("M40 -44 l-14 -26 l28 0 Z", PAINT), text(40, 66, "pointer in window", { anchor: "middle", size: 34 }))
+    stroke("M620 150 C600 20 330 10 210 130", INK, 6) +
+    group({ x: 204, y: 138, turn: 46 }, rect(-24, -14, 52, 28, STEEL_LIGHT)) +
+    group({ x: 330, y: 420 }, rect(-90, -30, 260, 60, STEEL_DARK), rect(0, -30, 80, 60, CHALK), path("M40 -44 l-14 -26 l28 0 Z", PAINT), text(40, 66, "pointer in window", { anchor: "middle", size: 34 }))
   );
 };
 

@@ -8,6 +8,9 @@ import { row, sheet } from "@/lib/cli/film/parts/sheet";
 import { boltAngle, wheel } from "@/lib/cli/film/parts/wheel";
 import { CHALK, circle, group, INK, line, PAINT, path, polar, rect, RUBBER, SOFT, STEEL, STEEL_DARK, STEEL_LIGHT, stroke, tenth, text } from "@/lib/cli/film/svg";
 
+/** Which spot the gauge's foot stands on. */
+const touch = (fromX: number, fromY: number, x: number, y: number): string => line(fromX, fromY, x, y, CHALK, 3, { "stroke-dasharray": "10 8" }) + circle(x, y, 11, PAINT);
+
 const hub: Picture = (since) => {
   const clean = glide(since(0), 400, 2200);
   const spin = Math.min(1, Math.max(0, (since(0) - 3000) / 3000));
@@ -17,7 +20,7 @@ const hub: Picture = (since) => {
     dialGauge(600, 170, 130, 0.01 * Math.sin(spin * Math.PI) * (spin > 0 ? 1 : 0) + (spin >= 1 ? 0.01 : 0), spin >= 1 ? 0.01 : null) +
     (spin < 1 && clean > 0.05 && clean < 0.95 ? group({ x: 150 + 150 * clean, y: 190 + 60 * Math.sin(clean * 9), turn: 30 }, rect(-16, -16, 150, 26, "#9C6B3F"), rect(-60, -16, 60, 40, STEEL)) : "") +
     text(240, 510, spin > 0 ? "Bare metal" : "Wire brush, then wipe", { anchor: "middle", size: 36 }) +
-    stroke("M600 400 C600 470 470 440 402 380", STEEL, 8)
+    touch(600, 384, 376, 336)
   );
 };
 
@@ -34,7 +37,7 @@ const runOut: Picture = (since) => {
   return (
     discFace(250, 260, 226, { turn: (since(1) < 0 ? 0 : first * 360) + index * 144 + second * 360, mark: PAINT }) +
     dialGauge(616, 166, 140, reading, swing) +
-    stroke("M616 410 C590 470 500 420 430 340", STEEL, 8) +
+    touch(616, 404, 432, 346) +
     text(616, 506, swing === null ? (since(1) < 0 ? "All bolts on" : "One full turn") : `${swing.toFixed(2)} mm`, { anchor: "middle", size: 52, font: swing === null ? "plate" : "reading", fill: swing === 0.07 ? PAINT : CHALK }) +
     (index > 0 && second === 0 ? text(616, 456, "Two holes on", { anchor: "middle", size: 42, fill: PAINT }) : "")
   );
@@ -44,7 +47,7 @@ const range = (y: number, name: string, from: number, to: number, at: number): s
   const x = (newtonMetres: number): number => 60 + newtonMetres * 3.3;
   return (
     rect(x(from), y - 24, x(to) - x(from), 48, at >= from && at <= to ? CHALK : STEEL_DARK) +
-    text(x(from) + 14, y + 13, name, { size: 34, fill: at >= from && at <= to ? INK : CHALK }) +
+    text(x(to) + (to > 100 ? -14 : 14), y + 13, name, { size: 34, anchor: to > 100 ? "end" : "start", fill: to > 100 && at >= from && at <= to ? INK : CHALK }) +
     text(x(from), y + 58, String(from), { size: 30, anchor: "middle", font: "reading" }) +
     text(x(to), y + 58, String(to), { size: 30, anchor: "middle", font: "reading" })
   );
@@ -90,7 +93,7 @@ const carrierTorque: Picture = (since) => {
 
 const pinTorque: Picture = (since) => {
   const turn = -18 * glide(since(0), 900, 1200) + 3 * glide(since(0), 2150, 120);
-  return group({ x: 120, y: 160, scale: 1.1 }, calliper(0, 0)) + torqueWrench(72, 68, "28", 20 + turn, "TW-1") + group({ opacity: glide(since(0), 2300, 500) }, ranges(28));
+  return group({ x: 200, y: 134 }, calliper(0, 0)) + torqueWrench(156, 50, "28", 22 + turn, "TW-1") + group({ opacity: glide(since(0), 2300, 500) }, ranges(28));
 };
 
 const pedal: Picture = (since) => {
@@ -115,13 +118,13 @@ const STAR = [0, 2, 4, 1, 3];
 const wheelStar: Picture = (since) => {
   const done = stage(since(0), 2900, 800, 5);
   const fills = [0, 1, 2, 3, 4].map((bolt) => (STAR.indexOf(bolt) < done ? PAINT : CHALK));
-  const spot = (bolt: number, r: number): [number, number] => polar(390, 256, r, boltAngle(bolt));
+  const spot = (bolt: number, r: number): [number, number] => polar(340, 256, r, boltAngle(bolt));
   const way = STAR.slice(0, done).map((bolt, index) => `${index === 0 ? "M" : "L"}${spot(bolt, 58).map(tenth).join(" ")}`);
   const numbers = STAR.slice(0, done).map((bolt, index) => {
     const [x, y] = spot(bolt, 118);
     return circle(x, y, 25, INK, { stroke: PAINT }) + text(x, y + 13, String(index + 1), { anchor: "middle", size: 38, weight: 700 });
   });
-  return line(20, 503, 760, 503, STEEL, 6) + wheel(390, 256, 242, { fills }) + (done > 1 ? stroke(way.join(" "), PAINT, 5) : "") + numbers.join("") + text(770, 496, "on the ground", { anchor: "end", size: 34 });
+  return line(20, 503, 760, 503, STEEL, 6) + wheel(340, 256, 242, { fills }) + (done > 1 ? stroke(way.join(" "), PAINT, 5) : "") + numbers.join("") + text(770, 496, "on the ground", { anchor: "end", size: 34 });
 };
 
 const rollers: Picture = (since) => {

@@ -3,7 +3,7 @@ import { dimension, panel } from "@/lib/cli/film/parts/annotations";
 import { discFace, discSection, pad } from "@/lib/cli/film/parts/disc";
 import { dialGauge, display, micrometer, torqueWrench } from "@/lib/cli/film/parts/instruments";
 import { row, sheet } from "@/lib/cli/film/parts/sheet";
-import { CHALK, circle, group, INK, line, PAINT, path, polar, rect, RUBBER, SOFT, STEEL, STEEL_DARK, STEEL_LIGHT, stroke, tenth, text } from "@/lib/cli/film/svg";
+import { CHALK, circle, group, INK, line, PAINT, path, polar, rect, SOFT, STEEL, STEEL_DARK, STEEL_LIGHT, stroke, tenth, text } from "@/lib/cli/film/svg";
 
 const jobCard: Picture = (since) => {
   const shake = since(1) > 600 && since(1) < 3600 ? 5 * Math.sin(since(1) / 55) : 0;
@@ -29,14 +29,14 @@ const limit: Picture = (since) => {
   const worn = glide(since(1), 500, 900);
   return (
     discSection(220, 490, 330, 140) +
-    text(220, 62, "New", { anchor: "middle", size: 40 }) +
+    text(220, 48, "New", { anchor: "middle", size: 40 }) +
     dimension(150, 290, 120, "24.0") +
     group(
       { opacity: glide(since(1), 200, 500) },
       discSection(560, 490, 330, between(140, 116, worn)),
       rect(490, 160, between(0, 12, worn), 330, "none", { stroke: PAINT, "stroke-dasharray": "8 8" }),
       rect(between(630, 618, worn), 160, between(0, 12, worn), 330, "none", { stroke: PAINT, "stroke-dasharray": "8 8" }),
-      text(560, 62, "Limit", { anchor: "middle", size: 40, fill: PAINT, weight: 700 }),
+      text(560, 48, "Limit", { anchor: "middle", size: 40, fill: PAINT, weight: 700 }),
       dimension(560 - between(70, 58, worn), 560 + between(70, 58, worn), 120, "22.0", PAINT),
     )
   );
@@ -63,7 +63,7 @@ const stopRules: Picture = (since) => {
     () => rect(-80, -80, 160, 140, CHALK) + rect(-80, -80, 160, 36, STEEL_DARK) + text(0, 20, "−5 days", { size: 42, fill: INK, anchor: "middle" }),
     () =>
       stroke("M-90 -70 C-30 -70 30 -60 40 0 C46 40 70 50 92 50", INK, 34) +
-      stroke("M-90 -70 C-30 -70 30 -60 40 0 C46 40 70 50 92 50", RUBBER, 26) +
+      stroke("M-90 -70 C-30 -70 30 -60 40 0 C46 40 70 50 92 50", STEEL_DARK, 26) +
       path("M30 40 q-16 26 0 36 q16 -10 0 -36 Z", "#C79A3A"),
   ];
   return signs
@@ -97,6 +97,10 @@ const pads: Picture = (since) => {
 
 const LEFT = ["21.88", "21.90", "21.91", "21.89", "21.87", "21.88", "21.90", "21.92"];
 
+/** A micrometer that reaches over the disc's edge, as seen from the front: its frame, and its anvil 10 mm in. */
+const micrometerEndOn = (x: number, y: number, r: number, degrees: number): string =>
+  group({ x, y, turn: degrees }, rect(r - 40, -15, 76, 30, STEEL, { rx: 12 }), circle(r - 19, 0, 22, STEEL_LIGHT), circle(r - 19, 0, 9, PAINT, { stroke: "none" }));
+
 const measureDisc: Picture = (since) => {
   const taken = stage(since(1), 900, 620, 8);
   const zeroing = since(1) < 0;
@@ -107,12 +111,13 @@ const measureDisc: Picture = (since) => {
   });
   const rows = LEFT.slice(0, taken).map((value, index) => {
     const marked = since(2) > 800 && (value === "21.87" || value === "21.92");
-    const [cx, cy] = [530 + (index % 2) * 130, 132 + Math.floor(index / 2) * 54];
-    return (marked ? rect(cx - 12, cy - 38, 120, 50, "none", { stroke: PAINT, "stroke-width": 4 }) : "") + text(cx, cy, value, { size: 36, font: "reading" });
+    const [cx, cy] = [520 + (index % 2) * 124, 136 + Math.floor(index / 2) * 52];
+    return (marked ? rect(cx - 9, cy - 36, 120, 48, "none", { stroke: PAINT, "stroke-width": 4 }) : "") + text(cx, cy, value, { size: 34, font: "reading" });
   });
   return (
     discFace(225, 250, 215) +
     points.join("") +
+    (zeroing ? "" : micrometerEndOn(225, 250, 205, -90 + between(Math.max(0, active - 1), active, glide(since(1), 900 + active * 620 - 300, 300)) * 45)) +
     panel(500, 40, 270, 268) +
     text(520, 84, "Left front, mm", { size: 32, fill: SOFT }) +
     rows.join("") +
@@ -121,20 +126,20 @@ const measureDisc: Picture = (since) => {
 };
 
 const leftVerdict: Picture = (since) => {
-  const y = (mm: number): number => 470 - (mm - 21.84) * 1800;
+  const y = (mm: number): number => 440 - (mm - 21.82) * 1800;
   const bars = LEFT.map((value, index) => {
     const mm = Number(value);
     return (
-      rect(100 + index * 80, y(mm), 50, 470 - y(mm), mm === 21.87 ? PAINT : STEEL_LIGHT) +
-      text(125 + index * 80, y(mm) - 14, value.slice(2), { anchor: "middle", size: 30, font: "reading" })
+      rect(40 + index * 76, y(mm), 50, 440 - y(mm), mm === 21.87 ? PAINT : STEEL_LIGHT) +
+      text(65 + index * 76, 484, value.slice(2), { anchor: "middle", size: 32, font: "reading", fill: mm === 21.87 ? PAINT : CHALK })
     );
   });
   return (
     bars.join("") +
-    line(80, y(22), 760, y(22), CHALK, 4, { "stroke-dasharray": "14 10" }) +
-    text(86, y(22) - 16, "Limit 22.0", { size: 38 }) +
-    text(86, 512, "Eight points of the left disc, hundredths of a millimetre", { size: 30, fill: SOFT, weight: 500 }) +
-    group({ opacity: glide(since(1), 400, 500) }, line(84, y(21.92), 750, y(21.92), PAINT, 3), line(84, y(21.87), 750, y(21.87), PAINT, 3), text(770, (y(21.92) + y(21.87)) / 2 + 12, "0.05", { size: 38, font: "reading", anchor: "end", fill: PAINT }))
+    line(30, y(22), 750, y(22), CHALK, 4, { "stroke-dasharray": "14 10" }) +
+    text(750, y(22) - 16, "Limit 22.0 mm", { size: 40, anchor: "end" }) +
+    text(30, 44, "Left disc, eight points", { size: 34, fill: SOFT, weight: 500 }) +
+    group({ opacity: glide(since(1), 400, 500) }, line(570, y(21.92), 664, y(21.92), PAINT, 4), line(350, y(21.87), 664, y(21.87), PAINT, 4, { "stroke-dasharray": "10 8" }), line(654, y(21.92), 654, y(21.87), PAINT, 4), text(672, (y(21.92) + y(21.87)) / 2 + 14, "0.05", { size: 42, font: "reading", fill: PAINT }))
   );
 };
 

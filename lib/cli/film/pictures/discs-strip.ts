@@ -13,10 +13,10 @@ const crackBolts: Picture = (since) => {
   const active = Math.min(4, done);
   const turn = 90 * glide(since(0), 800 + active * each, each);
   const turns = [0, 1, 2, 3, 4].map((index) => (index < done ? -30 : index === active ? -turn / 3 : 0));
-  const [bx, by] = polar(390, 262, 240 * 0.24, boltAngle(active));
+  const [bx, by] = polar(340, 262, 240 * 0.24, boltAngle(active));
   return (
     line(20, 503, 760, 503, STEEL, 6) +
-    wheel(390, 262, 240, { turns, fills: [0, 1, 2, 3, 4].map((index) => (index < done ? PAINT : STEEL_LIGHT)) }) +
+    wheel(340, 262, 240, { turns, fills: [0, 1, 2, 3, 4].map((index) => (index < done ? PAINT : STEEL_LIGHT)) }) +
     (done < 5 ? group({ x: bx, y: by, turn: -20 - turn }, rect(0, -11, 330, 22, STEEL_LIGHT), circle(0, 0, 25, STEEL_DARK)) : "") +
     text(770, 496, "on the ground", { anchor: "end", size: 34 })
   );
@@ -37,19 +37,19 @@ const lift: Picture = (since) => {
     line(20, ground + 8, 760, ground + 8, STEEL, 6) +
     liftArms(390, pads, between(70, 132, setting), setting > 0.95 ? PAINT : STEEL_LIGHT) +
     car(228 + pushing, body, { scale: 1.25 }) +
-    liftLock(374, 120, high > 0.99 ? settle : 0) +
+    (high > 0.9 ? liftLock(374, 386, high > 0.99 ? settle : 0) : "") +
     (first > 0.95 && high < 0.02 ? arrow(30, body - 140, 112, body - 140) + arrow(752, body - 140, 668, body - 140) : "") +
     (first > 0.95 && high < 0.02
       ? line(700, ground, 760, ground, CHALK, 3) + line(700, body, 760, body, CHALK, 3) + text(690, ground - 6, "100", { size: 40, font: "reading", anchor: "end", fill: PAINT })
       : "") +
-    (settle > 0.95 ? text(500, 130, "Locked", { size: 40, fill: PAINT }) : "")
+    (settle > 0.95 ? text(484, 400, "Locked", { size: 48, fill: PAINT }) : "")
   );
 };
 
 const wheelOff: Picture = (since) => {
   const away = glide(since(0), 500, 1500);
   return (
-    line(0, 490, 780, 490, STEEL, 6) +
+    line(-180, 490, 960, 490, STEEL, 6) +
     discFace(200, 236, 160) +
     group({ x: 318, y: 236, turn: 0 }, calliper(0, 0, { scale: 1.1 })) +
     group({ x: between(200, 590, away), y: between(236, 438, away) }, element3d(between(1, 0.32, away)))
@@ -63,13 +63,13 @@ const piston: Picture = (since) => {
   const cap = glide(since(0), 300, 700);
   const pushed = glide(since(0), 2200, 3400);
   return (
-    reservoir(60, 60, between(0.42, 0.86, pushed), cap) +
-    stroke("M132 240 C132 330 160 330 230 330", INK, 22) +
-    stroke("M132 240 C132 330 160 330 230 330", "#B98A2E", 12) +
+    reservoir(60, 84, between(0.42, 0.86, pushed), cap) +
+    stroke("M132 264 C132 330 160 330 230 330", INK, 22) +
+    stroke("M132 264 C132 330 160 330 230 330", "#B98A2E", 12) +
     pistonBore(230, 330, pushed) +
     arrow(660, 330, 590 - 96 * pushed + 6, 330) +
-    text(250, 96, "MAX", { size: 36, fill: pushed > 0.9 ? PAINT : CHALK }) +
-    line(106, 88, 240, 88, pushed > 0.9 ? PAINT : CHALK, 2) +
+    text(250, 124, "MAX", { size: 36, fill: pushed > 0.9 ? PAINT : CHALK }) +
+    line(106, 112, 240, 112, pushed > 0.9 ? PAINT : CHALK, 2) +
     text(580, 296, "slowly", { size: 38 })
   );
 };
@@ -85,7 +85,7 @@ const hook: Picture = (since) => {
     rect(540, 0, 40, 210, STEEL) +
     stroke(`M560 ${tenth(cy - 96)} L560 190 q0 -20 18 -20`, PAINT, lifted > 0.95 ? 8 : 0.01) +
     stroke(`M${tenth(cx + 20)} ${tenth(cy + 60)} C${tenth(cx + 130)} ${tenth(cy + 170)} 740 ${tenth(420 - 60 * lifted)} 740 160`, INK, 22) +
-    stroke(`M${tenth(cx + 20)} ${tenth(cy + 60)} C${tenth(cx + 130)} ${tenth(cy + 170)} 740 ${tenth(420 - 60 * lifted)} 740 160`, RUBBER, 15) +
+    stroke(`M${tenth(cx + 20)} ${tenth(cy + 60)} C${tenth(cx + 130)} ${tenth(cy + 170)} 740 ${tenth(420 - 60 * lifted)} 740 160`, STEEL_DARK, 15) +
     calliper(cx, cy) +
     (lifted > 0.95 ? text(772, 500, "hose hangs slack", { anchor: "end", size: 36 }) : "")
   );

@@ -19,7 +19,7 @@ export const script: FilmScript = {
         {
           picture: "belt-concern",
           lines: [
-            { text: "Auxiliary belt and tensioner on the Tessaly Brisk. Car and values are invented, so never carry a number from here to a real car." },
+            { text: "Auxiliary belt and tensioner on the Tessaly Brisk. Car and values are invented, so never carry a number from here to a real car.", plates: [note("Every value is invented")] },
             { key: "code", text: "It squeals from cold, the battery lamp flickers, and one code is stored: P0562, system voltage low.", plates: [note("P0562: system voltage low")] },
           ],
         },

@@ -19,7 +19,7 @@ export const script: FilmScript = {
         {
           picture: "job-card",
           lines: [
-            { text: "Front pads and discs on the Corvane Lume. Car, values and workshop are invented, so never use a number from here on a real car." },
+            { text: "Front pads and discs on the Corvane Lume. Car, values and workshop are invented, so never use a number from here on a real car.", plates: [note("Every value is invented")] },
             { text: "The card says: the steering wheel shakes when braking from motorway speed. Read it back, word for word.", plates: [note("Read the card back")] },
           ],
         },

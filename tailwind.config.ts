@@ -13,6 +13,7 @@ const config: Config = {
       deep: "var(--deep)",
       "deep-ink": "var(--deep-ink)",
       "deep-soft": "var(--deep-soft)",
+      "deep-line": "var(--deep-line)",
       ink: "var(--ink)",
       ink2: "var(--ink2)",
       strong: "var(--strong)",

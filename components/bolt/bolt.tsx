@@ -11,7 +11,9 @@ type BoltProps = {
   drawn?: boolean;
 };
 
-const HEXAGON = "50,20 76,35 76,65 50,80 24,65 24,35";
+const HEXAGON = "50,19 77,34.5 77,65.5 50,81 23,65.5 23,34.5";
+/** Below this the seat is left away and the head fills the picture, so that shape and number still tell. */
+const SMALL_PX = 24;
 
 /**
  * How a standing is drawn everywhere: what is held is the bolt, how far the next observation is marks it. Every state has a shape of its
@@ -21,33 +23,35 @@ export function Bolt({ standing, size = 44, label, drawn = false }: BoltProps) {
   const { held, next } = standing;
   const words = label ?? standingLabel(standing);
   const access = words === "" ? { "aria-hidden": true as const } : { role: "img", "aria-label": words };
+  const small = size < SMALL_PX;
+  const headed = held.kind !== "nothing" || isUnderWay(next);
   return (
     <svg viewBox="0 0 100 100" width={size} height={size} className="block shrink-0" {...access}>
-      {held.kind === "nothing" ? <Approach next={next} /> : <HeldBolt held={held} drawn={drawn} />}
-      {held.kind !== "nothing" && isUnderWay(next) && <NextMark next={next} />}
+      {headed && !small && <circle cx="50" cy="50" r="46" fill="var(--tint)" stroke="var(--steel)" strokeWidth="2.5" />}
+      <g transform={small ? "translate(50 50) scale(1.38) translate(-50 -50)" : undefined}>
+        {held.kind === "nothing" ? <Approach next={next} /> : <HeldBolt held={held} drawn={drawn} />}
+      </g>
+      {held.kind !== "nothing" && isUnderWay(next) && <NextMark next={next} small={small} />}
     </svg>
   );
 }
 
-const Seat = () => <circle cx="50" cy="50" r="45" fill="var(--tint)" stroke="var(--steel)" strokeWidth="3" />;
-
 /** Nothing is held yet: dashed ring, hole, or an outlined head with what comes next in it. */
 function Approach({ next }: { next: Next }) {
   if (next === "not_open") {
-    return <circle cx="50" cy="50" r="30" fill="none" stroke="var(--steel)" strokeWidth="6" strokeDasharray="11 8" />;
+    return <circle cx="50" cy="50" r="26" fill="none" stroke="var(--steel)" strokeWidth="5" pathLength="8" strokeDasharray="0.55 0.45" />;
   }
   if (next === "open") {
     return (
       <>
-        <circle cx="50" cy="50" r="33" fill="var(--chalk)" stroke="var(--steel)" strokeWidth="5" />
-        <circle cx="50" cy="50" r="21" fill="var(--ink2)" />
+        <circle cx="50" cy="50" r="28" fill="var(--chalk)" stroke="var(--steel)" strokeWidth="4.5" />
+        <circle cx="50" cy="50" r="18" fill="var(--ink2)" />
       </>
     );
   }
   return (
     <>
-      <Seat />
-      <polygon points={HEXAGON} fill="var(--chalk)" stroke="var(--strong)" strokeWidth="6" strokeLinejoin="round" />
+      <polygon points={HEXAGON} fill="var(--chalk)" stroke={next === "not_yet" ? "var(--ink)" : "var(--strong)"} strokeWidth="5" strokeLinejoin="round" />
       <NextSign next={next} />
     </>
   );
@@ -55,16 +59,16 @@ function Approach({ next }: { next: Next }) {
 
 /** What stands on an outlined head. */
 function NextSign({ next }: { next: Next }) {
-  if (next === "ready") return <circle cx="50" cy="50" r="10" fill="var(--strong)" />;
+  if (next === "ready") return <circle cx="50" cy="50" r="11.5" fill="var(--strong)" />;
   if (next === "booked") {
     return (
       <>
-        <circle cx="50" cy="50" r="15" fill="none" stroke="var(--strong)" strokeWidth="4.5" />
-        <circle cx="50" cy="50" r="7" fill="var(--strong)" />
+        <circle cx="50" cy="50" r="16" fill="none" stroke="var(--strong)" strokeWidth="4.5" />
+        <circle cx="50" cy="50" r="7.5" fill="var(--strong)" />
       </>
     );
   }
-  if (next === "not_yet") return <rect x="35" y="45" width="30" height="10" fill="var(--ink)" />;
+  if (next === "not_yet") return <rect x="36" y="45.5" width="28" height="9" fill="var(--ink)" />;
   return null;
 }
 
@@ -73,51 +77,50 @@ function HeldBolt({ held, drawn }: { held: Exclude<Held, { kind: "nothing" }>; d
   if (held.kind === "withdrawn") {
     return (
       <>
-        <Seat />
         <polygon points={HEXAGON} fill="var(--steel)" stroke="var(--ink2)" strokeWidth="4" strokeLinejoin="round" />
-        <path d="M16 84 L84 16" stroke="var(--ink)" strokeWidth="9" />
+        <path d="M18 82 82 18" stroke="var(--tint)" strokeWidth="14" />
+        <path d="M18 82 82 18" stroke="var(--ink)" strokeWidth="8" />
       </>
     );
   }
   const due = held.kind === "recheck_due";
   return (
     <>
-      <Seat />
-      <polygon points={HEXAGON} fill="var(--strong)" transform={due ? "rotate(22 50 50)" : undefined} />
-      {due ? (
-        <path d="M50 2 V16 M61 20 L58 34" stroke="var(--line)" strokeWidth="10" />
-      ) : (
-        <path d="M50 2 V32" stroke="var(--line)" strokeWidth="10" className={drawn ? "line-drawn" : undefined} />
-      )}
-      <text
-        x="50"
-        y="65"
-        textAnchor="middle"
-        fontFamily='"Barlow Condensed", sans-serif'
-        fontWeight="600"
-        fontSize="37"
-        fill="var(--strong-ink)"
-        transform={due ? "rotate(10 50 50)" : undefined}
-      >
+      <g transform={due ? "rotate(38 50 50)" : undefined}>
+        <polygon points={HEXAGON} fill="var(--strong)" stroke="var(--strong)" strokeWidth="3" strokeLinejoin="round" />
+        {due && <PaintLine path="M50 33V17" />}
+      </g>
+      {due ? <PaintLine path="M50 11V1" /> : <PaintLine path="M50 31V1" drawn={drawn} />}
+      <text x="50" y="66" textAnchor="middle" fontFamily='"Barlow Condensed", sans-serif' fontWeight="600" fontSize="42" fill="var(--strong-ink)">
         {held.level}
       </text>
     </>
   );
 }
 
-/** The small mark at the lower right of a held bolt. */
-function NextMark({ next }: { next: Next }) {
+/** Paint, with a bare edge that sets it off from the head. Runs from the head outwards, the way it is drawn. */
+function PaintLine({ path, drawn = false }: { path: string; drawn?: boolean }) {
   return (
     <>
-      <circle cx="80" cy="80" r="18" fill="var(--chalk)" stroke="var(--strong)" strokeWidth="4.5" />
-      {next === "ready" && <circle cx="80" cy="80" r="7" fill="var(--strong)" />}
+      <path d={path} stroke="var(--tint)" strokeWidth="16" />
+      <path d={path} stroke="var(--line)" strokeWidth="11" pathLength="1" className={drawn ? "line-drawn" : undefined} />
+    </>
+  );
+}
+
+/** The small mark at the lower right of a held bolt. */
+function NextMark({ next, small }: { next: Next; small: boolean }) {
+  return (
+    <g transform={small ? "translate(78 78) scale(1.25)" : "translate(80 80)"}>
+      <circle r="17" fill="var(--chalk)" stroke="var(--strong)" strokeWidth="4" />
+      {next === "ready" && <circle r="7" fill="var(--strong)" />}
       {next === "booked" && (
         <>
-          <circle cx="80" cy="80" r="10" fill="none" stroke="var(--strong)" strokeWidth="3" />
-          <circle cx="80" cy="80" r="4.5" fill="var(--strong)" />
+          <circle r="9.5" fill="none" stroke="var(--strong)" strokeWidth="3" />
+          <circle r="4.5" fill="var(--strong)" />
         </>
       )}
-      {next === "not_yet" && <rect x="71" y="76.5" width="18" height="7" fill="var(--ink)" />}
-    </>
+      {next === "not_yet" && <rect x="-9" y="-3.5" width="18" height="7" fill="var(--ink)" />}
+    </g>
   );
 }

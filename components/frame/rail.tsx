@@ -24,7 +24,7 @@ export function Rail({ home, places, who }: RailProps) {
         </Link>
         <nav aria-label="Places" className="hidden items-stretch gap-6 md:flex">
           {places.map((place) => (
-            <RailPlace key={place.href} place={place} className="border-y-4 border-t-transparent px-0.5" edge="border-b-line" />
+            <RailPlace key={place.href} place={place} className="border-y-4 border-t-transparent px-0.5" edge="border-b-deep-line" />
           ))}
         </nav>
         <div className="ml-auto flex items-center">{who}</div>
@@ -36,7 +36,7 @@ export function Rail({ home, places, who }: RailProps) {
         className="fixed inset-x-0 bottom-0 z-20 flex bg-deep pb-[env(safe-area-inset-bottom)] text-deep-ink md:hidden"
       >
         {places.map((place) => (
-          <RailPlace key={place.href} place={place} className="min-h-15 flex-auto justify-center border-t-4 px-1 text-center" edge="border-t-line" />
+          <RailPlace key={place.href} place={place} className="min-h-15 flex-auto justify-center border-t-4 px-1 text-center" edge="border-t-deep-line" />
         ))}
       </nav>
     </>

@@ -36,7 +36,7 @@ export function FilmControls(props: FilmControlsProps) {
         <span className="sr-only">Place in this step</span>
         <input
           type="range"
-          className="w-full accent-(--line)"
+          className="w-full accent-(--deep-line)"
           min={startMs}
           max={Math.max(endMs, startMs + 1)}
           step={100}

@@ -7,6 +7,9 @@ import { PageHead } from "@/components/frame/page-head";
 
 export const metadata: Metadata = { title: "What the bolts mean" };
 
+/** The same drawing at the sizes where it is used: in a line, in a table, on a plate, beside a heading, on a sign-off. */
+const SIZES = [16, 22, 34, 52, 104];
+
 export default function LegendPage() {
   return (
     <PublicFrame>
@@ -16,12 +19,17 @@ export default function LegendPage() {
           <SheetPart title="Every state">
             <BoltLegend />
           </SheetPart>
-          <SheetPart title="Small and large">
-            <div className="flex flex-wrap items-end gap-5">
-              {[16, 24, 34, 64, 120].map((size) => (
-                <Bolt key={size} standing={LEGEND[6]?.standing ?? { held: { kind: "nothing" }, next: "open" }} size={size} label="" />
+          <SheetPart title="From small to large">
+            <ul className="grid gap-4">
+              {SIZES.map((size) => (
+                <li key={size} className="flex flex-wrap items-center gap-3">
+                  <span className="w-16 text-sm text-ink2">{size} px</span>
+                  {LEGEND.map(({ standing, words }) => (
+                    <Bolt key={words} standing={standing} size={size} label="" />
+                  ))}
+                </li>
               ))}
-            </div>
+            </ul>
           </SheetPart>
         </Sheet>
       </Page>

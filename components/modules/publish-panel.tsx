@@ -4,6 +4,7 @@ import { useState } from "react";
 import { api, ApiProblem } from "@/components/api/client";
 import { usePress } from "@/components/api/use-press";
 import { Button } from "@/components/ui/button";
+import { Radio } from "@/components/ui/field";
 import { Notice } from "@/components/ui/notice";
 
 type PublishPanelProps = { params: { org: string; moduleId: string }; version: number; problems: string[]; changed: boolean; published: boolean };
@@ -37,14 +38,8 @@ export function PublishPanel({ params, version, problems, changed, published }: 
       {published && (
         <fieldset className="grid gap-2">
           <legend className="text-[1.1rem]">Did the work change?</legend>
-          <label className="flex min-h-11 items-center gap-3">
-            <input type="radio" name="work" className="size-5 accent-(--strong)" checked={workChanged === false} onChange={() => setWorkChanged(false)} />
-            No, only words or pictures. Sign-offs stay current.
-          </label>
-          <label className="flex min-h-11 items-center gap-3">
-            <input type="radio" name="work" className="size-5 accent-(--strong)" checked={workChanged === true} onChange={() => setWorkChanged(true)} />
-            Yes. Sign-offs on its tasks fall due for a re-check.
-          </label>
+          <Radio name="work" label="No, only words or pictures. Sign-offs stay current." checked={workChanged === false} onChange={() => setWorkChanged(false)} />
+          <Radio name="work" label="Yes. Sign-offs on its tasks fall due for a re-check." checked={workChanged === true} onChange={() => setWorkChanged(true)} />
         </fieldset>
       )}
       <Button kind="main" onClick={() => publish.mutate(undefined)} disabled={publish.isPending || workChanged === null}>

@@ -6,7 +6,7 @@ import { useState } from "react";
 import { api } from "@/components/api/client";
 import { usePress } from "@/components/api/use-press";
 import { Button } from "@/components/ui/button";
-import { TextArea, TextField } from "@/components/ui/field";
+import { Radio, TextArea, TextField } from "@/components/ui/field";
 import { Notice } from "@/components/ui/notice";
 import { LEVEL_LABEL, LEVELS, type Level } from "@/lib/core/tasks/types";
 import type { SheetOutcome } from "@/lib/schemas/observations";
@@ -71,15 +71,18 @@ function LevelChoice({ cap, reasons, level, onChange }: LevelChoiceProps) {
     <fieldset className="grid gap-2">
       <legend className="mb-1 text-[1.15rem]">Supervision level</legend>
       {LEVELS.map((candidate) => (
-        <label
+        <Radio
           key={candidate}
-          className={`flex min-h-12 items-center gap-3 rounded border-[1.5px] px-3 ${
-            candidate > cap ? "border-rule text-ink2" : level === candidate ? "border-strong bg-tint font-semibold" : "border-steel bg-chalk"
-          }`}
-        >
-          <input type="radio" name="level" className="size-5 accent-(--strong)" disabled={candidate > cap} checked={level === candidate} onChange={() => onChange(candidate)} />
-          <span className="tabular font-mono">{candidate}</span> {LEVEL_LABEL[candidate]}
-        </label>
+          name="level"
+          label={
+            <>
+              <span className="tabular font-mono">{candidate}</span> {LEVEL_LABEL[candidate]}
+            </>
+          }
+          disabled={candidate > cap}
+          checked={level === candidate}
+          onChange={() => onChange(candidate)}
+        />
       ))}
       {reasons.map((reason) => (
         <p key={reason} className="text-sm text-ink2">

@@ -1,4 +1,4 @@
-import type { PlateColumn, PlateLine } from "@/components/plate/plate";
+import type { PlateColumn, PlateLine } from "@/components/plate/plate-row";
 import { Tag } from "@/components/ui/tag";
 import type { Standing } from "@/lib/core/standing/types";
 

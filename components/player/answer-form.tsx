@@ -2,7 +2,7 @@
 
 import { useState } from "react";
 import { Button } from "@/components/ui/button";
-import { SelectField, TextField } from "@/components/ui/field";
+import { Radio, SelectField, TextField } from "@/components/ui/field";
 import type { AskedQuestion, GivenAnswer } from "@/lib/core/questions/types";
 import { findUnit, UNITS } from "@/lib/core/units/units";
 
@@ -32,21 +32,7 @@ function OneOfForm({ choices, busy, onAnswer }: Part & { choices: Item[] }) {
       <fieldset className="grid gap-2">
         <legend className="sr-only">Choose one</legend>
         {choices.map((choice) => (
-          <label
-            key={choice.id}
-            className={`flex min-h-12 cursor-pointer items-center gap-3 rounded border-[1.5px] px-3 py-2 ${
-              chosen === choice.id ? "border-strong bg-tint font-semibold" : "border-steel bg-chalk"
-            }`}
-          >
-            <input
-              type="radio"
-              name="choice"
-              className="size-5 accent-(--strong)"
-              checked={chosen === choice.id}
-              onChange={() => setChosen(choice.id)}
-            />
-            {choice.text}
-          </label>
+          <Radio key={choice.id} name="choice" label={choice.text} checked={chosen === choice.id} onChange={() => setChosen(choice.id)} />
         ))}
       </fieldset>
       <Button kind="main" type="submit" disabled={busy || chosen === null}>

@@ -4,7 +4,7 @@ import { useState } from "react";
 import { api, ApiProblem } from "@/components/api/client";
 import { usePress } from "@/components/api/use-press";
 import { Button } from "@/components/ui/button";
-import { Checkbox, SelectField, TextArea, TextField } from "@/components/ui/field";
+import { Checkbox, Radio, SelectField, TextArea, TextField } from "@/components/ui/field";
 import { Notice } from "@/components/ui/notice";
 import { formatDay } from "@/lib/core/dates";
 import type { ChangeRecordingInput, RecordingView } from "@/lib/schemas/recordings";
@@ -54,10 +54,10 @@ export function DetailsForm({ org, recording, vehicles, onKept }: DetailsFormPro
           <TextField label="Model" name="model" maxLength={120} required />
         </div>
       )}
-      <fieldset>
-        <legend className="font-plate text-[1.1rem] font-semibold">People in the picture or to be heard</legend>
-        <Radio label="Nobody but me" checked={consent === "nobody_in_shot"} onChange={() => setConsent("nobody_in_shot")} />
-        <Radio label="All of them agreed" checked={consent === "consent_given"} onChange={() => setConsent("consent_given")} />
+      <fieldset className="grid gap-2">
+        <legend className="mb-1 text-[1.1rem]">People in the picture or to be heard</legend>
+        <Radio name="consent" label="Nobody but me" checked={consent === "nobody_in_shot"} onChange={() => setConsent("nobody_in_shot")} />
+        <Radio name="consent" label="All of them agreed" checked={consent === "consent_given"} onChange={() => setConsent("consent_given")} />
       </fieldset>
       {consent === "consent_given" && (
         <TextArea label="Who agreed, and where that is kept" name="consentNote" rows={2} maxLength={500} defaultValue={recording.consentNote} />
@@ -82,13 +82,4 @@ export function DetailsForm({ org, recording, vehicles, onKept }: DetailsFormPro
 function checkedWords({ privateDetailsCheckedAt, privateDetailsCheckedBy }: RecordingView): string {
   if (!privateDetailsCheckedAt) return "Asked before an apprentice sees anything of it.";
   return `${privateDetailsCheckedBy ?? ""}, ${formatDay(privateDetailsCheckedAt.slice(0, 10))}`;
-}
-
-function Radio({ label, checked, onChange }: { label: string; checked: boolean; onChange: () => void }) {
-  return (
-    <label className="flex min-h-11 items-center gap-3">
-      <input type="radio" name="consent" checked={checked} onChange={onChange} className="size-5 accent-(--strong)" />
-      {label}
-    </label>
-  );
 }

@@ -4,7 +4,7 @@ import type { ButtonHTMLAttributes, ReactNode } from "react";
 export type ButtonKind = "main" | "plain" | "quiet";
 
 const KINDS: Record<ButtonKind, string> = {
-  main: "border-paint bg-paint text-paint-ink",
+  main: "border-paint bg-paint text-paint-ink enabled:hover:brightness-90",
   plain: "border-strong bg-sheet text-strong hover:bg-tint",
   quiet: "border-transparent bg-transparent text-strong underline underline-offset-4 hover:bg-tint",
 };

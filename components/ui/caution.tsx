@@ -3,12 +3,13 @@ import type { Caution } from "@/lib/core/steps/types";
 
 const GRADE_LABEL = { caution: "Caution", warning: "Warning", danger: "Danger" } as const;
 
-/** Drawn by us: a triangle with a stroke and a dot. */
-export function CautionSign({ size = 36 }: { size?: number }) {
+/** Drawn by us: a triangle with a stroke and a dot. The graver, the heavier: a thin edge, a thick edge, filled. */
+export function CautionSign({ grade = "caution", size = 36 }: { grade?: Caution["grade"]; size?: number }) {
+  const filled = grade === "danger";
   return (
     <svg viewBox="0 0 40 36" width={size} height={size * 0.9} aria-hidden className="shrink-0">
-      <path d="M20 2 38 34H2Z" fill="none" stroke="currentColor" strokeWidth="3.5" strokeLinejoin="round" />
-      <path d="M20 13v10M20 27v3" stroke="currentColor" strokeWidth="3.5" />
+      <path d="M20 3 37 33H3Z" fill={filled ? "currentColor" : "none"} stroke="currentColor" strokeWidth={grade === "caution" ? 2.5 : 5} strokeLinejoin="round" />
+      <path d="M20 13v10M20 26.5v3.5" stroke={filled ? "var(--caution)" : "currentColor"} strokeWidth="3.5" />
     </svg>
   );
 }
@@ -16,8 +17,8 @@ export function CautionSign({ size = 36 }: { size?: number }) {
 /** The one yellow thing of the product, used for nothing but cautions. It always defers to the maker's data, local rules and licensed practice. */
 export function CautionPlate({ caution, children }: { caution: Pick<Caution, "grade" | "hazard" | "instruction">; children?: ReactNode }) {
   return (
-    <div className="flex items-start gap-3 rounded bg-caution px-4 py-3 text-caution-ink">
-      <CautionSign />
+    <div data-keep className="flex items-start gap-3 rounded bg-caution px-4 py-3 text-caution-ink">
+      <CautionSign grade={caution.grade} />
       <div>
         <p className="font-plate text-[1.15rem] font-semibold leading-tight">
           {GRADE_LABEL[caution.grade]}: {caution.hazard}

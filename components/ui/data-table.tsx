@@ -1,13 +1,12 @@
 "use client";
 
-import { useMemo, useState, type ReactNode } from "react";
+import { useDeferredValue, useMemo, useState } from "react";
 import { Button } from "@/components/ui/button";
-import { TextField } from "@/components/ui/field";
+import { SelectField, TextField } from "@/components/ui/field";
+import { filterRows, searchTexts, sortRows, type Order, type Row } from "@/components/ui/table-order";
 
-/** One cell: what is shown, and what it sorts and is found by. */
-export type Cell = { show: ReactNode; sort: string | number };
+export type { Cell, Row } from "@/components/ui/table-order";
 export type Column = { key: string; label: string; numeric?: boolean };
-export type Row = { id: string; cells: Record<string, Cell> };
 
 type DataTableProps = {
   caption: string;
@@ -21,82 +20,114 @@ type DataTableProps = {
 
 /** Shown at once; more on demand, so that ten thousand rows cost no more than these. */
 const PAGE = 100;
+/** Fewer are seen at a glance, and need no filter. */
+const FILTER_FROM = 6;
 
-/** A real table that sorts and filters; on a phone each row is a job card with the same facts. */
+/** A real table that sorts and filters; on a phone each row is a job card with the same facts. The roles are told, since cards take them away. */
 export function DataTable({ caption, columns, rows, sortedBy, nothingFound = "Nothing fits the filter." }: DataTableProps) {
   const [filter, setFilter] = useState("");
-  const [order, setOrder] = useState({ key: sortedBy?.key ?? columns[0]?.key ?? "", descending: sortedBy?.descending ?? false });
+  const [order, setOrder] = useState<Order>({ key: sortedBy?.key ?? columns[0]?.key ?? "", descending: sortedBy?.descending ?? false });
   const [shown, setShown] = useState(PAGE);
-  const found = useMemo(() => sortRows(filterRows(rows, filter), order), [rows, filter, order]);
-  const visible = found.slice(0, shown);
+  const sought = useDeferredValue(filter);
+  const texts = useMemo(() => searchTexts(rows), [rows]);
+  const sorted = useMemo(() => sortRows(filterRows(rows, texts, sought), order), [rows, texts, sought, order]);
   return (
     <div>
-      {rows.length > 5 && (
-        <div className="flex flex-wrap items-end gap-4 border-b border-rule px-4 py-3" data-no-print>
-          <TextField label="Filter" type="search" value={filter} onChange={(event) => setFilter(event.target.value)} className="w-full max-w-80" />
-          <p className="pb-2 text-ink2" role="status">
-            {found.length} of {rows.length}
-          </p>
+      {rows.length > 1 && (
+        <div className={`flex flex-wrap items-end gap-x-4 gap-y-2 border-b border-rule px-4 py-3 ${rows.length < FILTER_FROM ? "md:hidden" : ""}`} data-no-print>
+          {rows.length >= FILTER_FROM && (
+            <TextField label="Filter" type="search" value={filter} onChange={(event) => setFilter(event.target.value)} className="min-w-40 max-w-80 flex-1" />
+          )}
+          <OrderField columns={columns} order={order} onOrder={setOrder} />
+          {rows.length >= FILTER_FROM && (
+            <p className="pb-2 text-ink2" role="status">
+              {sorted.length} of {rows.length}
+            </p>
+          )}
         </div>
       )}
-      <table className="w-full border-collapse">
+      <table role="table" className="w-full border-collapse">
         <caption className="sr-only">{caption}</caption>
-        <thead className="max-md:sr-only">
-          <tr>
+        <thead role="rowgroup" className="card:hidden print:table-header-group">
+          <tr role="row">
             {columns.map((column) => (
-              <th key={column.key} scope="col" aria-sort={order.key !== column.key ? "none" : order.descending ? "descending" : "ascending"} className="border-b-2 border-steel text-left">
-                <button
-                  type="button"
-                  className={`min-h-11 w-full px-4 font-plate text-[1.05rem] font-semibold ${column.numeric ? "text-right" : "text-left"}`}
-                  onClick={() => setOrder({ key: column.key, descending: order.key === column.key && !order.descending })}
-                >
-                  {column.label} <span aria-hidden>{order.key === column.key ? (order.descending ? "↓" : "↑") : ""}</span>
-                </button>
-              </th>
+              <HeadCell key={column.key} column={column} order={order} onOrder={setOrder} />
             ))}
           </tr>
         </thead>
-        <tbody>
-          {visible.map((row) => (
-            <tr key={row.id} className="border-b border-rule last:border-b-0 max-md:grid max-md:gap-0.5 max-md:px-4 max-md:py-3">
-              {columns.map((column, index) => (
-                <td
-                  key={column.key}
-                  className={`md:px-4 md:py-2.5 max-md:flex max-md:gap-2 ${index === 0 ? "max-md:text-[1.05rem] max-md:font-semibold" : ""} ${column.numeric ? "tabular md:text-right md:font-mono" : ""}`}
-                >
-                  {index > 0 && <span className="w-32 shrink-0 text-ink2 md:hidden">{column.label}</span>}
-                  <span className="min-w-0">{row.cells[column.key]?.show}</span>
-                </td>
-              ))}
-            </tr>
+        <tbody role="rowgroup">
+          {sorted.slice(0, shown).map((row) => (
+            <BodyRow key={row.id} row={row} columns={columns} />
           ))}
         </tbody>
       </table>
-      {found.length === 0 && <p className="px-4 py-6 text-ink2">{nothingFound}</p>}
-      {found.length > shown && (
+      {sorted.length === 0 && <p className="px-4 py-6 text-ink2">{nothingFound}</p>}
+      {sorted.length > shown && (
         <div className="px-4 py-3" data-no-print>
-          <Button onClick={() => setShown(shown + PAGE)}>Show {Math.min(PAGE, found.length - shown)} more</Button>
+          <Button onClick={() => setShown(shown + PAGE)}>Show {Math.min(PAGE, sorted.length - shown)} more</Button>
         </div>
       )}
     </div>
   );
 }
 
-function filterRows(rows: readonly Row[], filter: string): readonly Row[] {
-  const words = filter.toLowerCase().split(/\s+/).filter(Boolean);
-  if (words.length === 0) return rows;
-  return rows.filter((row) => {
-    const text = Object.values(row.cells)
-      .map((cell) => String(cell.sort).toLowerCase())
-      .join(" ");
-    return words.every((word) => text.includes(word));
-  });
+type OrderProps = { order: Order; onOrder: (order: Order) => void };
+
+function HeadCell({ column, order, onOrder }: OrderProps & { column: Column }) {
+  const on = order.key === column.key;
+  return (
+    <th role="columnheader" scope="col" aria-sort={!on ? "none" : order.descending ? "descending" : "ascending"} className="border-b-2 border-steel p-0 text-left">
+      <button
+        type="button"
+        className={`flex min-h-11 w-full items-center gap-1.5 px-4 text-[1.05rem] font-semibold hover:bg-tint focus-visible:-outline-offset-2 ${column.numeric ? "justify-end" : ""}`}
+        onClick={() => onOrder({ key: column.key, descending: on && !order.descending })}
+      >
+        {column.label}
+        <svg viewBox="0 0 10 8" width="10" height="8" aria-hidden className={`shrink-0 ${on ? "" : "invisible"} ${order.descending ? "" : "rotate-180"}`}>
+          <path d="M0 0H10L5 8Z" fill="currentColor" />
+        </svg>
+      </button>
+    </th>
+  );
 }
 
-function sortRows(rows: readonly Row[], { key, descending }: { key: string; descending: boolean }): Row[] {
-  const sign = descending ? -1 : 1;
-  return rows.toSorted((a, b) => {
-    const [x, y] = [a.cells[key]?.sort ?? "", b.cells[key]?.sort ?? ""];
-    return sign * (typeof x === "number" && typeof y === "number" ? x - y : String(x).localeCompare(String(y), "en"));
-  });
+/** Cards have no heads to press: on a phone the order is chosen here. */
+function OrderField({ columns, order, onOrder }: OrderProps & { columns: readonly Column[] }) {
+  return (
+    <div className="flex items-end gap-2 md:hidden">
+      <SelectField label="Sort by" value={order.key} onChange={(event) => onOrder({ ...order, key: event.target.value })}>
+        {columns.map((column) => (
+          <option key={column.key} value={column.key}>
+            {column.label}
+          </option>
+        ))}
+      </SelectField>
+      <Button
+        className="w-11 px-0!"
+        aria-label={order.descending ? "From the last to the first; turn round" : "From the first to the last; turn round"}
+        onClick={() => onOrder({ ...order, descending: !order.descending })}
+      >
+        <span aria-hidden>{order.descending ? "↓" : "↑"}</span>
+      </Button>
+    </div>
+  );
+}
+
+function BodyRow({ row, columns }: { row: Row; columns: readonly Column[] }) {
+  return (
+    <tr role="row" className="border-b border-rule last:border-b-0 card:grid card:gap-1 card:px-4 card:py-3 md:hover:bg-tint">
+      {columns.map((column, index) => (
+        <td
+          role="cell"
+          key={column.key}
+          className={`px-4 py-2.5 card:flex card:gap-2 card:p-0 ${index === 0 ? "card:text-[1.05rem] card:font-semibold" : ""} ${
+            column.numeric ? "tabular text-right font-mono card:text-left" : ""
+          }`}
+        >
+          {index > 0 && <span className="hidden w-32 shrink-0 font-sans text-ink2 card:inline">{column.label}</span>}
+          <span className="min-w-0">{row.cells[column.key]?.show}</span>
+        </td>
+      ))}
+    </tr>
+  );
 }

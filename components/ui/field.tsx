@@ -85,3 +85,15 @@ export function Checkbox({ label, hint, ...input }: CheckboxProps) {
     </label>
   );
 }
+
+type RadioProps = Omit<InputHTMLAttributes<HTMLInputElement>, "className" | "type"> & { label: ReactNode; name: string };
+
+/** One of several, framed; the whole frame is the target. Stands in a fieldset whose legend asks. */
+export function Radio({ label, ...input }: RadioProps) {
+  return (
+    <label className="flex min-h-12 items-center gap-3 rounded border-[1.5px] border-steel bg-chalk px-3 py-2 has-checked:border-strong has-checked:bg-tint has-checked:font-semibold has-disabled:border-rule has-disabled:bg-transparent has-disabled:text-ink2">
+      <input type="radio" {...input} className="size-5 shrink-0 accent-(--strong)" />
+      <span className="min-w-0">{label}</span>
+    </label>
+  );
+}

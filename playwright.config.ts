@@ -10,6 +10,7 @@ export default defineConfig({
   forbidOnly: Boolean(process.env.CI),
   use: {
     baseURL: process.env.E2E_BASE_URL ?? "http://127.0.0.1:4200",
+    actionTimeout: 20_000,
     trace: "retain-on-failure",
     launchOptions: {
       executablePath: process.env.CHROMIUM ?? "/usr/bin/chromium",

@@ -1,6 +1,5 @@
+import { moduleId, personId, recordingId, taskId } from "@/db/seeds/demo/ids";
 import { demoId } from "@/db/seeds/demo/demo-id";
-import { personId } from "@/db/seeds/demo/seed-cast";
-import { moduleId, recordingId, taskId } from "@/db/seeds/demo/seed-work";
 
 export type ShotPage = { name: string; path: string };
 /** Pages of each role in the demo, with the address that signs in for them. */

@@ -1,9 +1,8 @@
+import { orgId, personId, taskId } from "@/db/seeds/demo/ids";
 import { statSync } from "node:fs";
 import { beforeAll, describe, expect, test } from "vitest";
 import { plannedStandings, type PlannedStanding } from "@/db/seeds/demo/history";
 import { loadDemo } from "@/db/seeds/demo/load-demo";
-import { orgId, personId } from "@/db/seeds/demo/seed-cast";
-import { taskId } from "@/db/seeds/demo/seed-work";
 import { DEMO_TASKS } from "@/db/seeds/demo/tasks";
 import { leafHash } from "@/lib/core/ledger/merkle";
 import { taskContentHashMatches, standingCode } from "../support/demo-checks";

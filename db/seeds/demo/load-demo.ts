@@ -1,6 +1,7 @@
+import { orgId } from "@/db/seeds/demo/ids";
 import type { Knex } from "knex";
 import { LedgerWriter } from "@/db/seeds/demo/ledger-writer";
-import { orgId, seedCast } from "@/db/seeds/demo/seed-cast";
+import { seedCast } from "@/db/seeds/demo/seed-cast";
 import { seedStandings } from "@/db/seeds/demo/seed-standings";
 import { seedRecordings, seedTasks, type PutFile } from "@/db/seeds/demo/seed-work";
 

@@ -1,3 +1,4 @@
+import { orgId, personId } from "@/db/seeds/demo/ids";
 import type { Knex } from "knex";
 import { AGREEMENTS, APPRENTICES, INSTRUMENTS, LICENCES, ORGANISATIONS, STAFF, VEHICLES, type OrganisationKey } from "@/db/seeds/demo/cast";
 import { demoId } from "@/db/seeds/demo/demo-id";
@@ -9,8 +10,6 @@ export function dayFrom(day: string, offset: number): string {
   return date.toISOString().slice(0, 10);
 }
 
-export const orgId = (key: OrganisationKey): string => demoId(`organisation/${key}`);
-export const personId = (key: string): string => demoId(`person/${key}`);
 
 /** Organisations, people, memberships, agreements, the cohort, vehicles, instruments and licences. */
 export async function seedCast(trx: Knex.Transaction, day: string, passwordHash: string): Promise<void> {

@@ -1,11 +1,12 @@
+import { moduleId, moduleRevisionId, orgId, personId, taskId, taskRevisionId } from "@/db/seeds/demo/ids";
 import type { Knex } from "knex";
 import { demoId } from "@/db/seeds/demo/demo-id";
 import { STAFF, APPRENTICES } from "@/db/seeds/demo/cast";
 import { DEMO_FILMS, mediaPath } from "@/db/seeds/demo/films/films";
 import { plannedStandings, WORKSHOP_OF, type PlannedStanding } from "@/db/seeds/demo/history";
 import type { LedgerWriter } from "@/db/seeds/demo/ledger-writer";
-import { dayFrom, orgId, personId } from "@/db/seeds/demo/seed-cast";
-import { CHANGED_DAYS_AGO, CHANGED_TASK, type PutFile, moduleId, moduleRevisionId, taskId, taskRevisionId } from "@/db/seeds/demo/seed-work";
+import { dayFrom } from "@/db/seeds/demo/seed-cast";
+import { CHANGED_DAYS_AGO, CHANGED_TASK, type PutFile } from "@/db/seeds/demo/seed-work";
 import { metSheet, notYetSheet } from "@/db/seeds/demo/sheets";
 import { DEMO_TASKS, type DemoTaskKey } from "@/db/seeds/demo/tasks";
 import { addMonths } from "@/lib/core/dates";

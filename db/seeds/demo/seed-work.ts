@@ -1,9 +1,10 @@
+import { moduleId, moduleRevisionId, orgId, personId, recordingId, taskId, taskRevisionId } from "@/db/seeds/demo/ids";
 import { readFileSync } from "node:fs";
 import type { Knex } from "knex";
 import { demoId } from "@/db/seeds/demo/demo-id";
 import { DEMO_FILMS, MEDIA_FILES, mediaPath, type DemoFilm } from "@/db/seeds/demo/films/films";
 import type { LedgerWriter } from "@/db/seeds/demo/ledger-writer";
-import { dayFrom, orgId, personId } from "@/db/seeds/demo/seed-cast";
+import { dayFrom } from "@/db/seeds/demo/seed-cast";
 import { DEMO_TASKS, type DemoTaskKey } from "@/db/seeds/demo/tasks";
 import { revisionHash } from "@/lib/core/modules/revision-hash";
 import type { ModuleContent } from "@/lib/core/modules/types";
@@ -17,11 +18,6 @@ export type PutFile = (
   contentType: string,
 ) => Promise<{ storeKey: string; sizeBytes: number }>;
 
-export const taskId = (key: DemoTaskKey): string => demoId(`task/${key}`);
-export const taskRevisionId = (key: DemoTaskKey, number: number): string => demoId(`task/${key}/revision/${number}`);
-export const moduleId = (film: string): string => demoId(`module/${film}`);
-export const moduleRevisionId = (film: string): string => demoId(`module/${film}/revision/1`);
-export const recordingId = (film: string): string => demoId(`recording/${film}`);
 
 /** The task whose work changed lately, so that everything held on it is due for a re-check. */
 export const CHANGED_TASK: DemoTaskKey = "wheel-bearing";

@@ -160,7 +160,11 @@ async function markOut(page: Page): Promise<void> {
   const side = page.getByRole("complementary", { name: "What is chosen" });
   const key = (name: string) => page.keyboard.press(name);
 
-  await key("n"); // a new step from the beginning: ten seconds where there is room
+  // A new step from the beginning: ten seconds where there is room. Pressed again while the page is still coming to life.
+  await expect(async () => {
+    await key("n");
+    await expect(side.getByLabel("Name", { exact: true })).toBeVisible({ timeout: 1000 });
+  }).toPass();
   await side.getByLabel("Name", { exact: true }).fill("Look the car over");
   await side.getByLabel("Name", { exact: true }).blur();
   await seek(page, 10_000);
@@ -187,7 +191,7 @@ async function markOut(page: Page): Promise<void> {
 
   await seek(page, 7000);
   await key("q");
-  await side.getByRole("combobox", { name: "Kind" }).or(side.getByLabel("Kind")).first().selectOption("number");
+  await side.getByRole("group", { name: "Kind of question" }).getByText("number", { exact: false }).click();
   await side.getByLabel("Question", { exact: true }).fill("How tight is the drain plug?");
   await side.getByLabel("Value", { exact: true }).fill("30");
   await side.getByLabel("± within").fill("1.2");
@@ -197,7 +201,7 @@ async function markOut(page: Page): Promise<void> {
 
   await seek(page, 15_000);
   await key("q");
-  await side.getByRole("combobox", { name: "Kind" }).or(side.getByLabel("Kind")).first().selectOption("put_in_order");
+  await side.getByRole("group", { name: "Kind of question" }).getByText("order", { exact: false }).click();
   await side.getByLabel("Question", { exact: true }).fill("Put the work in order");
   await side.getByLabel("Place 1", { exact: true }).fill("Look the car over first");
   await side.getByLabel("Place 2", { exact: true }).fill("Then tighten the plug");

@@ -24,14 +24,21 @@ export async function findCohort(db: Db, organisationId: string, id: string): Pr
 
 export type CohortMember = { personId: string; name: string; workshop: string; startsOn: string; plannedEndOn: string };
 
-/** A cohort's apprentices by name. A person who changed workshop has one agreement in the cohort: the present one. */
-export async function listCohortMembers(db: Db, organisationId: string, cohortId: string): Promise<CohortMember[]> {
+/** Apprentices of one cohort, or of every cohort, by name. A person who changed workshop has one agreement in a cohort: the present one. */
+export async function listCohortMembers(db: Db, organisationId: string, cohortId?: string): Promise<(CohortMember & { cohortId: string })[]> {
   const rows = await db("cohort_members as m")
     .join("training_agreements as a", "a.id", "m.agreement_id")
     .join("people as p", "p.id", "a.apprentice_id")
     .join("organisations as w", "w.id", "a.workshop_id")
-    .select("p.id", "p.name", "w.name as workshop", "a.starts_on", "a.planned_end_on")
-    .where({ "m.organisation_id": organisationId, "m.cohort_id": cohortId })
+    .select("m.cohort_id", "p.id", "p.name", "w.name as workshop", "a.starts_on", "a.planned_end_on")
+    .where({ "m.organisation_id": organisationId, ...(cohortId === undefined ? {} : { "m.cohort_id": cohortId }) })
     .orderBy("p.name");
-  return rows.map((row) => ({ personId: row.id, name: row.name, workshop: row.workshop, startsOn: row.starts_on, plannedEndOn: row.planned_end_on }));
+  return rows.map((row) => ({
+    cohortId: row.cohort_id,
+    personId: row.id,
+    name: row.name,
+    workshop: row.workshop,
+    startsOn: row.starts_on,
+    plannedEndOn: row.planned_end_on,
+  }));
 }

@@ -6,6 +6,7 @@ import { getDb } from "@/db/client";
 import { hashPassword } from "@/lib/auth/passwords";
 import { ROLES, type Actor, type Role } from "@/lib/core/roles";
 import { today } from "@/lib/services/clock";
+import { getStore } from "@/storage/store";
 import { createMember, createOrganisation, type Organisation } from "./factories";
 
 export type Caller = "anonymous" | Role | "outsider";
@@ -27,7 +28,12 @@ export { DEMO_PASSWORD };
 export async function apiWorld(owner: Knex): Promise<World> {
   const passwordHash = await hashPassword(DEMO_PASSWORD);
   let files = 0;
-  const putFile = async (of: { subjectId: string; kind: string }) => ({ storeKey: `demo/${of.subjectId}/${of.kind}/${(files += 1)}`, sizeBytes: 1 });
+  // The bench reads its strip of small pictures from the store; nothing else of the films is read here.
+  const putFile = async (of: { subjectId: string; kind: string }, _path: string, contentType: string) => {
+    const storeKey = `demo/${of.subjectId}/${of.kind}/${(files += 1)}`;
+    if (of.kind === "storyboard_track") await getStore().putObject(storeKey, Buffer.from("WEBVTT\n"), { contentType });
+    return { storeKey, sizeBytes: 1 };
+  };
   await loadDemo(owner, { day: today(), passwordHash, putFile });
   const organisation = (place: Place): Organisation => ({ id: orgId(place), ...ORGANISATIONS[place], isDemo: true });
   const orgs = { vennick: organisation("vennick"), merrowdale: organisation("merrowdale") };

@@ -1,6 +1,6 @@
 import { formatDay } from "@/lib/core/dates";
 import type { Actor } from "@/lib/core/roles";
-import { viewCohort, viewCohorts } from "@/lib/services/cohorts/view-cohort";
+import { viewWaiting } from "@/lib/services/cohorts/view-cohort";
 import { viewGiven } from "@/lib/services/learning/view-given";
 import { viewModules } from "@/lib/services/modules/view-modules";
 import { viewOpenSheets } from "@/lib/services/observations/view-open-sheets";
@@ -90,18 +90,14 @@ async function forMentor(actor: Actor): Promise<TodayItem[]> {
 }
 
 async function forLiaison(actor: Actor): Promise<TodayItem[]> {
-  const items: TodayItem[] = [];
-  for (const cohort of await viewCohorts(actor)) {
-    const { plate } = await viewCohort(actor, cohort.id);
-    const waiting = plate.rows.filter((row) => row.waitedDays !== null).toSorted((a, b) => (b.waitedDays ?? 0) - (a.waitedDays ?? 0));
+  return (await viewWaiting(actor)).map(({ id, name, waiting }): TodayItem => {
     const longest = waiting[0];
-    items.push({
-      title: cohort.name,
+    return {
+      title: name,
       reason: longest ? `${count(waiting.length, "apprentice waits", "apprentices wait")} to be observed; ${longest.name} longest, ${longest.waitedDays} days.` : "Nobody waits to be observed.",
-      href: `/cohorts/${cohort.id}`,
-    });
-  }
-  return items;
+      href: `/cohorts/${id}`,
+    };
+  });
 }
 
 async function forManager(actor: Actor): Promise<TodayItem[]> {

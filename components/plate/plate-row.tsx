@@ -19,14 +19,14 @@ type PlateRowProps = {
   lit: boolean;
 };
 
-/** One person's bolts. Drawn again only when the place on the plate comes to this row or leaves it. */
+/** One person and their bolts. Drawn again only when the place on the plate comes to this row or leaves it. */
 export const PlateRow = memo(function PlateRow({ line, columns, row, stop, lit }: PlateRowProps) {
   const name = <span className="font-semibold">{line.name}</span>;
   return (
     <tr aria-rowindex={row + 2} style={{ height: ROW_PX }} className="group">
       <th
         scope="row"
-        className={`sticky left-0 z-10 max-w-40 whitespace-nowrap border-b border-r-2 border-b-rule border-r-steel px-4 text-left font-sans text-base font-normal group-hover:bg-tint sm:max-w-none print:px-1 ${
+        className={`sticky left-0 z-10 max-w-44 whitespace-nowrap border-b border-r-2 border-b-rule border-r-steel px-3 text-left sm:px-4 font-sans text-base font-normal group-hover:bg-tint sm:max-w-none print:px-1 ${
           lit ? "bg-tint" : "bg-sheet"
         }`}
       >

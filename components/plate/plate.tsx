@@ -11,6 +11,8 @@ type Place = { row: number; column: number };
 
 /** Below this, every row is drawn: a search in the page then finds all of them. */
 const WINDOW_FROM = 80;
+/** The heads, h-40: they stay above the rows and cover those that scroll under them. */
+const HEAD_PX = 160;
 /** What a plate shows before its real height is known. */
 const FIRST_RECT = { width: 1000, height: 900 };
 
@@ -30,6 +32,8 @@ export function Plate({ caption, columns, lines, tailLabel }: PlateProps) {
     estimateSize: () => ROW_PX,
     overscan: 12,
     initialRect: FIRST_RECT,
+    scrollMargin: HEAD_PX,
+    scrollPaddingStart: HEAD_PX,
     enabled: windowed,
   });
   const rows = windowed ? virtual.getVirtualItems().map((item) => item.index) : lines.map((_, index) => index);
@@ -58,7 +62,7 @@ export function Plate({ caption, columns, lines, tailLabel }: PlateProps) {
   };
   const here = lines[at.row]?.standings[at.column];
   return (
-    <div className="print-plate">
+    <div className="plate">
       <div
         ref={scroller}
         className="isolate max-h-[75dvh] scroll-pl-44 scroll-pt-44 overflow-auto print:max-h-none print:overflow-visible"
@@ -80,7 +84,7 @@ export function Plate({ caption, columns, lines, tailLabel }: PlateProps) {
                   title={column.title}
                   className={`sticky top-0 z-10 h-40 border-b-2 border-r border-b-steel border-r-rule px-0 align-bottom ${chosen && index === at.column ? "bg-tint" : "bg-sheet"}`}
                 >
-                  <span className="mx-auto my-2 block h-36 rotate-180 overflow-hidden text-ellipsis whitespace-nowrap text-left text-[1.05rem] [writing-mode:vertical-rl]">
+                  <span className="mb-2 ml-auto mr-auto mt-2 block h-36 rotate-180 overflow-hidden text-ellipsis whitespace-nowrap text-left text-[1.05rem] [writing-mode:vertical-rl]">
                     {column.label}
                   </span>
                 </th>

@@ -20,7 +20,7 @@ type DataTableProps = {
 
 /** Shown at once; more on demand, so that ten thousand rows cost no more than these. */
 const PAGE = 100;
-/** Fewer are seen at a glance, and need no filter. */
+/** Fewer are seen at a glance and need no filter. */
 const FILTER_FROM = 6;
 
 /** A real table that sorts and filters; on a phone each row is a job card with the same facts. The roles are told, since cards take them away. */
@@ -79,7 +79,7 @@ function HeadCell({ column, order, onOrder }: OrderProps & { column: Column }) {
     <th role="columnheader" scope="col" aria-sort={!on ? "none" : order.descending ? "descending" : "ascending"} className="border-b-2 border-steel p-0 text-left">
       <button
         type="button"
-        className={`flex min-h-11 w-full items-center gap-1.5 px-4 text-[1.05rem] font-semibold hover:bg-tint focus-visible:-outline-offset-2 ${column.numeric ? "justify-end" : ""}`}
+        className={`flex min-h-11 w-full items-center gap-1.5 px-4 text-[1.05rem] font-semibold hover:bg-tint focus-visible:-outline-offset-2 ${column.numeric ? "flex-row-reverse" : ""}`}
         onClick={() => onOrder({ key: column.key, descending: on && !order.descending })}
       >
         {column.label}

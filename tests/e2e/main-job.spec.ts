@@ -309,7 +309,7 @@ async function fillSheet(page: Page, plugReading: string): Promise<void> {
   if (plugReading === "30.0") await mark(/Tightens the drain plug/, "Met");
   await mark(/Tells the customer/, "Met");
   await mark(/Record complete/, "Met");
-  await expect(page.getByText("nothing left")).toBeVisible();
+  await expect(page.getByText("nothing left", { exact: true })).toBeVisible();
   await expect(page.getByText(/· kept$/)).toBeVisible();
 }
 

@@ -1,4 +1,4 @@
-import { randomUUID } from "node:crypto";
+import { createHash, randomBytes, randomUUID } from "node:crypto";
 import { writeFileSync } from "node:fs";
 import { expect, test, type Page } from "@playwright/test";
 import { personId, recordingId, taskId } from "@/db/seeds/demo/ids";
@@ -44,8 +44,20 @@ test("nobody observes or signs off their own work", async ({ browser }) => {
 });
 
 test("a link that has run out is told plainly", async ({ page }) => {
-  await page.goto("/join#a-token-that-was-never-sent-to-anybody-000");
-  await expect(page.getByText(/no longer|not good|expired|used|run out|isn’t/i).first()).toBeVisible();
+  const db = ownerDb();
+  const token = randomBytes(32).toString("base64url");
+  await db("invitations").insert({
+    organisation_id: db("organisations").select("id").where({ slug: "vennick" }),
+    name: "Too Late",
+    email: "too-late@demo.invalid",
+    roles: ["mentor"],
+    token_hash: createHash("sha256").update(token).digest("hex"),
+    created_at: "2026-01-01",
+    expires_at: "2026-01-08",
+  });
+  await page.goto(`/join#${token}`);
+  await expect(page.getByText("This link does not work any more")).toBeVisible();
+  await db.destroy();
 });
 
 test("a broken file of steps is refused with its lines, and nothing is half taken in", async ({ browser }) => {

@@ -3,7 +3,7 @@
 import { useRef } from "react";
 import type { BenchAct, Draft } from "@/components/bench/bench-state";
 import { QuestionEditor } from "@/components/bench/question-editor";
-import type { Chosen } from "@/components/bench/ruler";
+import type { Chosen } from "@/components/bench/chosen";
 import { StepEditor } from "@/components/bench/step-editor";
 import { shortTime } from "@/components/bench/time-field";
 import { Button } from "@/components/ui/button";

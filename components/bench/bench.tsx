@@ -7,7 +7,8 @@ import { beginBench, bench, stepAt, type BenchAct, type Draft } from "@/componen
 import { KeysSheet } from "@/components/bench/keys-sheet";
 import type { Storyboard } from "@/components/bench/picture-lane";
 import { emptyBody } from "@/components/bench/question-editor";
-import { Ruler, type Chosen } from "@/components/bench/ruler";
+import type { Chosen } from "@/components/bench/chosen";
+import { Ruler } from "@/components/bench/ruler";
 import { SavedLine } from "@/components/bench/saved-line";
 import { SavingNotices } from "@/components/bench/saving-notices";
 import { Transport, ZOOMS } from "@/components/bench/transport";

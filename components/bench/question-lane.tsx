@@ -1,4 +1,4 @@
-import type { Chosen } from "@/components/bench/ruler";
+import type { Chosen } from "@/components/bench/chosen";
 import type { Question } from "@/lib/core/questions/types";
 import { formatClock } from "@/lib/core/webvtt/timestamps";
 

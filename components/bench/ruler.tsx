@@ -1,5 +1,6 @@
 "use client";
 
+import type { Chosen } from "@/components/bench/chosen";
 import { useEffect, useRef, useState, type ReactNode } from "react";
 import type { BenchAct, Draft } from "@/components/bench/bench-state";
 import { CaptionLane } from "@/components/bench/caption-lane";
@@ -10,7 +11,6 @@ import { shortTime } from "@/components/bench/time-field";
 import { useDrag } from "@/components/bench/use-drag";
 import { formatClock } from "@/lib/core/webvtt/timestamps";
 
-export type Chosen = { kind: "step" | "question"; id: string } | null;
 
 type RulerProps = {
   durationMs: number;

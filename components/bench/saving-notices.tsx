@@ -1,7 +1,7 @@
 "use client";
 
 import type { Draft } from "@/components/bench/bench-state";
-import type { Chosen } from "@/components/bench/ruler";
+import type { Chosen } from "@/components/bench/chosen";
 import type { useSaving } from "@/components/bench/use-saving";
 import { Button } from "@/components/ui/button";
 import { Notice } from "@/components/ui/notice";

@@ -2,7 +2,7 @@
 
 import { useRef, type KeyboardEvent } from "react";
 import type { BenchAct } from "@/components/bench/bench-state";
-import type { Chosen } from "@/components/bench/ruler";
+import type { Chosen } from "@/components/bench/chosen";
 import { shortTime } from "@/components/bench/time-field";
 import { useDrag } from "@/components/bench/use-drag";
 import { CautionSign } from "@/components/ui/caution";

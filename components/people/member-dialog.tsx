@@ -7,7 +7,7 @@ import { leaveFor } from "@/components/accounts/leave-for";
 import { Refused } from "@/components/accounts/refused";
 import { useForm } from "@/components/accounts/use-form";
 import { api } from "@/components/api/client";
-import type { Member } from "@/components/people/members";
+import type { Member } from "@/components/people/member";
 import { chosenRoles, RoleBoxes, type RoleChoice } from "@/components/people/role-boxes";
 import { Button } from "@/components/ui/button";
 import { Dialog } from "@/components/ui/dialog";

@@ -1,5 +1,6 @@
 "use client";
 
+import type { Member } from "@/components/people/member";
 import { useState } from "react";
 import { MemberDialog } from "@/components/people/member-dialog";
 import { rolesInWords, type RoleChoice } from "@/components/people/role-boxes";
@@ -9,7 +10,6 @@ import { Tag } from "@/components/ui/tag";
 import { formatDay } from "@/lib/core/dates";
 import type { Role } from "@/lib/core/roles";
 
-export type Member = { personId: string; name: string; email: string; roles: Role[]; joinedOn: string; suspended: boolean; you: boolean };
 
 type MembersProps = { org: string; organisation: string; roles: readonly RoleChoice[]; members: readonly Member[] };
 

@@ -25,6 +25,8 @@ export function seenShare(spans: readonly Span[], step: { startMs: number; endMs
 
 /** A little more than the clock says: reports travel, and a player's clock and ours never quite agree. At most this much a report, … */
 export const ALLOWANCE_MS = 3000;
+/** A player reports every few seconds; whoever was silent for longer than this was not playing all that time. */
+export const LONGEST_GAP_MS = 15 * 60_000;
 /** … and at most this share of the time that passed: a report that is sent over and over earns nothing. */
 const ALLOWANCE_SHARE = 0.5;
 /** The fastest rate that the player offers. */
@@ -36,14 +38,14 @@ const MIN_RATE = 0.25;
  * What the server accepts of a report: never more than could have been played since the last one, that is time passed × rate and a small
  * allowance. Spans are united and clipped to the recording, then taken in order until the time is used up; the one that goes over is cut.
  * @param of.reported   played stretches in ms, in any order; what is no stretch is passed over
- * @param of.elapsedMs  wall time since the person's last report from any tab or device, by the server's clock
+ * @param of.elapsedMs  wall time since the person's last report from any tab or device, by the server's clock; at most LONGEST_GAP_MS of it counts
  * @param of.rate       claimed rate of play; held to 0.25–MAX_RATE
  * @returns spans in whole ms, in order, without overlap
  */
 export function acceptSpans(of: { reported: readonly Span[]; durationMs: number; elapsedMs: number; rate: number }): Span[] {
-  const elapsedMs = of.elapsedMs > 0 ? of.elapsedMs : 0;
+  const passedMs = of.elapsedMs > 0 ? Math.min(of.elapsedMs, LONGEST_GAP_MS) : 0;
   const rate = Math.min(MAX_RATE, Math.max(MIN_RATE, Number.isFinite(of.rate) ? of.rate : 1));
-  let left = Math.floor(elapsedMs * rate + Math.min(ALLOWANCE_MS, elapsedMs * ALLOWANCE_SHARE));
+  let left = Math.floor(passedMs * rate + Math.min(ALLOWANCE_MS, passedMs * ALLOWANCE_SHARE));
   const accepted: Span[] = [];
   const clipped = of.reported.map(([start, end]): Span => [Math.max(0, Math.ceil(start)), Math.min(of.durationMs, Math.floor(end))]);
   for (const [start, end] of unionSpans(clipped)) {

@@ -49,12 +49,17 @@ export async function viewBench(actor: Actor, recordingId: string): Promise<Benc
   };
 }
 
-/** The strip of small pictures; none while it isn't made yet. */
+/** The strip of small pictures; none while it isn't made yet or can't be had: the bench works without it. */
 async function readTiles(actor: Actor, recordingId: string, media: Media): Promise<{ sheet: string; tiles: StoryboardTile[] } | null> {
   const track = (await listRenditions(getDb(), actor.organisation.id, [recordingId])).find((file) => file.kind === "storyboard_track");
   if (!track || !media.storyboardSheet) return null;
-  const { body } = await getStore().getObject(track.storeKey);
-  const chunks: Buffer[] = [];
-  for await (const chunk of body) chunks.push(chunk as Buffer);
-  return { sheet: media.storyboardSheet, tiles: readStoryboard(Buffer.concat(chunks).toString("utf8")) };
+  try {
+    const { body } = await getStore().getObject(track.storeKey);
+    const chunks: Buffer[] = [];
+    for await (const chunk of body) chunks.push(chunk as Buffer);
+    return { sheet: media.storyboardSheet, tiles: readStoryboard(Buffer.concat(chunks).toString("utf8")) };
+  } catch (error) {
+    if (error instanceof AppError) return null;
+    throw error;
+  }
 }

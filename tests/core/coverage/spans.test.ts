@@ -1,7 +1,7 @@
 import { readFileSync } from "node:fs";
 import fc from "fast-check";
 import { describe, expect, test } from "vitest";
-import { ALLOWANCE_MS, MAX_RATE, acceptSpans, coveredMs, furthestAllowed, seenShare, unionSpans, type Span } from "@/lib/core/coverage/spans";
+import { ALLOWANCE_MS, LONGEST_GAP_MS, MAX_RATE, acceptSpans, coveredMs, furthestAllowed, seenShare, unionSpans, type Span } from "@/lib/core/coverage/spans";
 import { SEEN_SHARE } from "@/lib/core/modules/knowledge";
 
 // Source: vectors/coverage/xapi-progress.json (format and first example of the xAPI video profile; figures worked there).
@@ -124,4 +124,11 @@ describe("how far somebody may go", () => {
       }),
     );
   });
+});
+
+// The product's rule is time passed × rate; that nobody plays for longer than this without a report is ours.
+test("whoever was silent for a day has not been playing all day", () => {
+  const dayMs = 24 * 3_600_000;
+  const accepted = acceptSpans({ reported: [[0, dayMs]], durationMs: dayMs, elapsedMs: dayMs, rate: 1 });
+  expect(coveredMs(accepted, 0, dayMs)).toBe(LONGEST_GAP_MS + ALLOWANCE_MS);
 });

@@ -1,7 +1,7 @@
 import { mkdirSync, rmSync } from "node:fs";
 import { AxeBuilder } from "@axe-core/playwright";
-import { chromium, type Browser, type BrowserContext, type Page } from "@playwright/test";
-import { DEMO_PASSWORD } from "@/db/seeds/demo/cast";
+import type { Browser, BrowserContext, Page } from "@playwright/test";
+import { launchBrowser, signInState } from "@/lib/cli/demo-browser";
 import { OPEN_SHEET, SHOT_ROLES, type ShotRole } from "@/lib/cli/shots-pages";
 
 const SIZES = [
@@ -18,7 +18,7 @@ async function main(): Promise<void> {
   const only = process.argv[3];
   if (!only) rmSync(FOLDER, { recursive: true, force: true });
   mkdirSync(FOLDER, { recursive: true });
-  const browser = await chromium.launch({ executablePath: "/usr/bin/chromium", args: ["--no-sandbox", "--disable-gpu", "--disable-background-networking"] });
+  const browser = await launchBrowser();
   let faults = 0;
   try {
     for (const role of SHOT_ROLES) if (!only || role.role === only) faults += await shootRole(browser, base, role);
@@ -31,7 +31,7 @@ async function main(): Promise<void> {
 
 async function shootRole(browser: Browser, base: string, role: ShotRole): Promise<number> {
   let faults = 0;
-  const state = role.email ? await signIn(browser, base, role.email) : undefined;
+  const state = role.email ? await signInState(browser, base, role.email) : undefined;
   for (const { name: size, viewport } of SIZES) {
     for (const theme of THEMES) {
       const context = await browser.newContext({ baseURL: base, viewport, colorScheme: theme, reducedMotion: "reduce", hasTouch: size === "phone", ...(state ? { storageState: state } : {}) });
@@ -40,19 +40,6 @@ async function shootRole(browser: Browser, base: string, role: ShotRole): Promis
     }
   }
   return faults;
-}
-
-async function signIn(browser: Browser, base: string, email: string): Promise<Awaited<ReturnType<BrowserContext["storageState"]>>> {
-  const context = await browser.newContext({ baseURL: base });
-  const page = await context.newPage();
-  await page.goto("/sign-in");
-  await page.getByLabel("E-mail address").fill(email);
-  await page.getByLabel("Password", { exact: true }).fill(DEMO_PASSWORD);
-  await page.getByRole("button", { name: "Sign in", exact: true }).click();
-  await page.waitForURL((url) => !url.pathname.startsWith("/sign-in"));
-  const state = await context.storageState();
-  await context.close();
-  return state;
 }
 
 async function shoot(context: BrowserContext, { name, path }: { name: string; path: string }, file: string, withAxe: boolean): Promise<number> {

@@ -65,8 +65,8 @@ test("the newest PostgreSQL from 15 on is taken; an older one is none", () => {
 
 test("root's cluster lies outside the clone under a short name of its own; everybody else's in the data folder", () => {
   expect(clusterFolder("/home/asha/clone/.data", false)).toBe("/home/asha/clone/.data/postgres");
-  expect(clusterFolder("/root/one/.data", true)).toMatch(/^\/var\/lib\/witnessline\/[0-9a-f]{12}$/);
-  expect(clusterFolder("/root/one/.data", true)).not.toBe(clusterFolder("/root/two/.data", true));
+  expect(clusterFolder("/srv/one/.data", true)).toMatch(/^\/var\/lib\/witnessline\/[0-9a-f]{12}$/);
+  expect(clusterFolder("/srv/one/.data", true)).not.toBe(clusterFolder("/srv/two/.data", true));
 });
 
 test("a cluster is known by its data folder's instance", () => {
